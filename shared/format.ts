@@ -1,5 +1,6 @@
 import { UNIT_LABELS } from './labels.js'
 import type { RangeRow, TypedBounds } from './ranges.js'
+import { fromCanonical } from './units.js'
 import type { LengthUnit, TemperatureUnit, Unit } from './units.js'
 
 /** The units a reader has chosen; everything else has one unit only. */
@@ -23,23 +24,6 @@ export function toCanonicalUnit(unit: Unit): Unit {
   if (unit === 'degF') return 'degC'
   if (unit === 'in') return 'cm'
   return unit
-}
-
-/**
- * Converts a canonical number for showing. The factors are exact: 9/5 and 32 °F, 2.54 cm to the inch
- * (NIST SP 811, appendix B).
- */
-export function toShown(canonical: number, shown: Unit): number {
-  if (shown === 'degF') return (canonical * 9) / 5 + 32
-  if (shown === 'in') return canonical / 2.54
-  return canonical
-}
-
-/** Converts a canonical difference for showing: by the factor alone, never with the 32 °F. */
-export function toShownDifference(canonical: number, shown: Unit): number {
-  if (shown === 'degF') return (canonical * 9) / 5
-  if (shown === 'in') return canonical / 2.54
-  return canonical
 }
 
 /** How many decimals a number needs to be written whole, at most `most`. */
@@ -80,12 +64,12 @@ export function formatValue(canonical: number, shown: Unit): string {
 
 /** The same without the unit. */
 export function formatBareValue(canonical: number, shown: Unit): string {
-  return formatNumber(toShown(canonical, shown), decimalsShown([canonical], shown))
+  return formatNumber(fromCanonical(canonical, shown), decimalsShown([canonical], shown))
 }
 
 /** A stored number in full for a list of records: as many decimals as it has, in °C no fewer than the data print. */
 export function formatExact(canonical: number, shown: Unit): string {
-  const value = toShown(canonical, shown)
+  const value = fromCanonical(canonical, shown)
   const decimals = shown === 'degF' ? Math.max(1, countDecimals(canonical, 4)) : countDecimals(value, 4)
   return `${formatNumber(value, decimals)}${NO_BREAK_SPACE}${UNIT_LABELS[shown]}`
 }
@@ -102,7 +86,7 @@ export function formatBounds(low: number | null, high: number | null, shown: Uni
   const known = [low, high].filter((bound): bound is number => bound !== null)
   const decimals = decimalsShown(known, shown)
   const write = (bound: number | null) =>
-    bound === null ? null : formatNumber(toShown(bound, shown), decimals)
+    bound === null ? null : formatNumber(fromCanonical(bound, shown), decimals)
   return { low: write(low), high: write(high), unit: UNIT_LABELS[shown] }
 }
 

@@ -1,3 +1,4 @@
+import type { Standing } from './checker/verdict.js'
 import type { EvidenceKind } from './evidence.js'
 import type { NameStatus } from './names.js'
 import type { Quantity } from './physiology.js'
@@ -131,11 +132,8 @@ export const UNIT_LABELS: Record<Unit, string> = {
   in: 'in',
 }
 
-/** The answer for one reading as its mark tells it, worst first. */
-export type VerdictMarkKind =
-  'past' | 'near' | 'high' | 'low' | 'unclear' | 'no-range' | 'not-low' | 'not-high' | 'inside'
-
-export const VERDICT_LABELS: Record<VerdictMarkKind, string> = {
+/** The word beside each verdict's mark, worst first. */
+export const VERDICT_LABELS: Record<Standing, string> = {
   past: 'Past a limit',
   near: 'Near a limit',
   high: 'High',

@@ -11,8 +11,6 @@ import {
   formatRowLimit,
   formatValue,
   speakBounds,
-  toShown,
-  toShownDifference,
   writeBoundsWithUnit,
 } from '../../shared/format.js'
 import type { RangeRow } from '../../shared/ranges.js'
@@ -42,21 +40,6 @@ function row(over: Partial<RangeRow>): RangeRow {
 }
 
 describe('numbers', () => {
-  // Fixed points of the scales: water freezes at 32 °F and boils at 212 °F; −40 is the same on both (NIST SP 811, B.8).
-  test.each([
-    [0, 32],
-    [100, 212],
-    [-40, -40],
-    [37, 98.6],
-  ])('%d °C is shown as %d °F', (degC, degF) => {
-    expect(toShown(degC, 'degF')).toBeCloseTo(degF, 10)
-  })
-
-  test('a difference converts by the factor alone', () => {
-    expect(toShownDifference(10, 'degF')).toBeCloseTo(18, 10)
-    expect(toShownDifference(10, 'degC')).toBe(10)
-  })
-
   test('a negative number has a real minus sign and zero has none', () => {
     expect(formatNumber(-3.25, 1)).toBe('−3.3')
     expect(formatNumber(-0.04, 1)).toBe('0.0')
