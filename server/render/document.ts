@@ -1,0 +1,23 @@
+import type { PageDocument, RenderedPage } from './page-renderer.js'
+
+const HTML_TAG = /<html[^>]*>/
+const BODY_TAG = /<body[^>]*>/
+const PLACES = ['<!--head-->', '<!--app-->', '<!--state-->'] as const
+
+/**
+ * Puts a rendered page into the client's shell: styles and head tags, the markup, and the state its script starts from.
+ * `links` are further head tags, of the files this page will need.
+ */
+export function assembleDocument(shell: string, page: RenderedPage, links: string): PageDocument {
+  const missing = PLACES.find((place) => !shell.includes(place))
+  if (missing !== undefined) throw new Error(`The client's shell has no ${missing}.`)
+  const state = `<script type="application/json" id="page-state">${page.state}</script>`
+  // Each piece is put in by a function: a dollar sign in a page's text is no pattern.
+  const html = shell
+    .replace(HTML_TAG, (tag) => (page.htmlAttrs === '' ? tag : `<html ${page.htmlAttrs}>`))
+    .replace(BODY_TAG, (tag) => (page.bodyAttrs === '' ? tag : `<body ${page.bodyAttrs}>`))
+    .replace('<!--state-->', () => state)
+    .replace('<!--head-->', () => [page.headTags, page.css, links].filter(Boolean).join('\n'))
+    .replace('<!--app-->', () => page.html)
+  return { status: page.status, location: page.location, html, cacheable: page.cacheable }
+}
