@@ -1,5 +1,7 @@
 import type { EvidenceRow } from './evidence.js'
 import { canSupportRange, EVIDENCE_WEIGHTS } from './evidence-policy.js'
+import { countPrintedDecimals } from './printed-numbers.js'
+import { differenceToCanonical } from './units.js'
 import type { Unit } from './units.js'
 
 /** What one statement says, in the canonical unit of its parameter; a null side is a side it says nothing of. */
@@ -28,26 +30,14 @@ export interface EvidenceVote {
   atMost: number | null
 }
 
-/** Canonical units in one unit of what is printed, for differences (NIST SP 811: 1 °F apart is 5/9 °C apart). */
-const CANONICAL_PER_UNIT: Readonly<Record<Unit, number>> = {
-  degC: 1,
-  degF: 5 / 9,
-  percentRh: 1,
-  uvi: 1,
-  h: 1,
-  cm: 1,
-  in: 2.54,
-}
-
 /**
  * Half a step of the last digit of a printed number, in canonical units: "32" in °C gives 0.5, "90.0" in °F gives 0.05 × 5/9.
  * Null when the text is not a plain decimal number.
  */
 export function findHalfLastDigit(printed: string, unit: Unit): number | null {
-  const match = /^[+\-−–]?\d+(?:[.,](\d+))?$/.exec(printed.trim())
-  if (match === null) return null
-  const decimals = match[1]?.length ?? 0
-  return 0.5 * 10 ** -decimals * CANONICAL_PER_UNIT[unit]
+  const decimals = countPrintedDecimals(printed)
+  if (decimals === null) return null
+  return differenceToCanonical(0.5 * 10 ** -decimals, unit)
 }
 
 function toValueSpan(value: number | null, printed: string | null, unit: Unit): StatedInterval | null {
