@@ -183,14 +183,12 @@ function explain(error) {
  */
 export async function runCommand(body, options) {
   const run = new Run(options)
-  let code = 0
-  try {
-    code = (await body(run)) ?? 0
-  } catch (error) {
-    code = 1
+  const code = await body(run).catch((error) => {
     if (!run.isEnding) explain(error)
-  }
+    return 1
+  })
+  // A signal came first: it tidies up and leaves by itself.
   if (run.isEnding) return
   await run.end()
-  process.exit(code)
+  process.exit(code ?? 0)
 }

@@ -176,7 +176,7 @@ function startServer(run, from, env, logPath) {
 }
 
 /** @param {number} port */
-async function answers(port) {
+export async function answers(port) {
   try {
     const answer = await fetch(`http://127.0.0.1:${port}/healthz`, { signal: AbortSignal.timeout(2_000) })
     await answer.body?.cancel()

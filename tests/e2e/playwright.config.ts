@@ -6,7 +6,7 @@ const baseURL = process.env.E2E_BASE_URL ?? 'http://127.0.0.1:8080'
 export default defineConfig({
   testDir: '.',
   testMatch: '**/*.e2e.ts',
-  outputDir: '../../test-results',
+  outputDir: '../../test-results/e2e',
   forbidOnly: true,
   fullyParallel: false,
   workers: 2,
