@@ -44,7 +44,12 @@ export type CheckPage = Pick<
 >
 
 /** A question the person can confirm: the value is possible, but looks like another unit or a slip. */
-export const questionSchema = z.enum(['meant-fahrenheit', 'uv-index-very-high'])
+export const questionSchema = z.enum([
+  'meant-fahrenheit',
+  'temperature-very-high',
+  'uv-index-very-high',
+  'instrument-does-not-fit-position',
+])
 export type Question = z.infer<typeof questionSchema>
 
 /** What the reading says once repeats, instrument and surface are accounted for; canonical unit. */

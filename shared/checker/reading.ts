@@ -1,10 +1,10 @@
 import { z } from 'zod'
 import { parameterSchema, periodSchema, positionSchema, uvMeaningSchema } from '../ranges.js'
 import type { Parameter } from '../ranges.js'
-import { unitSchema } from '../units.js'
+import { toCanonical, unitSchema } from '../units.js'
 import type { Unit } from '../units.js'
-import { surfaceMaterialSchema } from './emissivity.js'
-import { instrumentKindSchema } from './instruments.js'
+import { correctForEmissivity, surfaceMaterialSchema } from './emissivity.js'
+import { canRead, instrumentKindSchema } from './instruments.js'
 import { findImpossibility } from './physical-bounds.js'
 
 /** Most repeats of one reading. */
@@ -52,6 +52,15 @@ export const surfaceSchema = z.strictObject({
 })
 export type Surface = z.infer<typeof surfaceSchema>
 
+function hasBalance(values: readonly number[], unit: Unit, surface: Surface): boolean {
+  const { emissivity, emissivitySet } = surface
+  const surroundingsC = toCanonical(surface.surroundings, unit)
+  return values.every((value) => {
+    const readC = toCanonical(value, unit)
+    return correctForEmissivity({ readC, emissivitySet, emissivity, surroundingsC }) !== null
+  })
+}
+
 /** One measured value with its instrument, numbers as typed in `unit`. Its value is the mean of `values`. */
 export const readingSchema = z
   .strictObject({
@@ -97,8 +106,17 @@ export const readingSchema = z
         context.addIssue({ code: 'custom', path: ['surface'], message })
       } else {
         const message = findImpossibility('temperature', reading.surface.surroundings, reading.unit)
-        if (message !== null) context.addIssue({ code: 'custom', path: ['surface', 'surroundings'], message })
+        if (message !== null) {
+          context.addIssue({ code: 'custom', path: ['surface', 'surroundings'], message })
+        } else if (!hasBalance(reading.values, reading.unit, reading.surface)) {
+          const hint = 'No surface at these settings and in these surroundings could give this reading.'
+          context.addIssue({ code: 'custom', path: ['surface', 'emissivity'], message: hint })
+        }
       }
+    }
+    if (!canRead(reading.instrument, reading.parameter)) {
+      const message = 'This instrument does not measure this.'
+      context.addIssue({ code: 'custom', path: ['instrument'], message })
     }
   })
 export type Reading = z.infer<typeof readingSchema>

@@ -1,0 +1,103 @@
+import type { Parameter } from '../ranges.js'
+import type { FirstChange } from './check.js'
+import { findChangeRule } from './change-rules.js'
+import type { Trouble } from './change-rules.js'
+import { RATIO_DIFFERENCE_FACTOR, THERMOSTAT_SWING_C } from './policy.js'
+import type { ReadingPeriod } from './reading.js'
+import { compareStandings } from './verdict.js'
+import type { LimitVerdict, RangeVerdict, Standing } from './verdict.js'
+
+/** A judged reading as the rules see it, canonical units. */
+export interface JudgedReading {
+  readingIndex: number
+  parameter: Parameter
+  period: ReadingPeriod
+  value: number
+  uncertainty: number
+  standing: Standing
+  limit: LimitVerdict
+  range: RangeVerdict
+}
+
+/**
+ * Share of the present power that would bring a reading to its target, r = (T_target − T_room)/(T_read − T_room), the
+ * excess over the room taken as proportional to lamp power. Null when either difference is 2·u or less. Temperatures in one
+ * unit, either scale.
+ */
+export function findPowerRatio(
+  target: number,
+  room: number,
+  reading: { value: number; uncertainty: number },
+): number | null {
+  const least = RATIO_DIFFERENCE_FACTOR * reading.uncertainty
+  const wanted = target - room
+  const excess = reading.value - room
+  if (wanted <= least || excess <= least) return null
+  return wanted / excess
+}
+
+/** Thermostat floor for the night, °C: the night low, half the thermostat's swing and 2·u, sensed at the animal. */
+export function findThermostatFloor(nightLowC: number, swingC: number, uncertaintyC: number): number {
+  return nightLowC + swingC / 2 + 2 * uncertaintyC
+}
+
+const LIMITED_BY_A_SOURCE: readonly Parameter[] = ['temperature', 'uv-index', 'relative-humidity']
+
+function findTrouble({ parameter, limit, range }: JudgedReading): Trouble | null {
+  if (limit.answer === 'past' && limit.side === 'upper') {
+    return LIMITED_BY_A_SOURCE.includes(parameter) ? 'past-upper-limit' : null
+  }
+  if (parameter !== 'temperature') return null
+  if (limit.answer === 'past' || limit.answer === 'near') {
+    return limit.side === 'upper' ? 'too-hot' : 'too-cool'
+  }
+  if (range.answer === 'high') return 'too-hot'
+  return range.answer === 'low' ? 'too-cool' : null
+}
+
+/** Past an upper limit before everything; then the worse verdict; then too hot before too cool, heat being the quicker harm. */
+const TROUBLE_ORDER: readonly Trouble[] = ['past-upper-limit', 'too-hot', 'too-cool']
+
+function compareTroubles(
+  a: { trouble: Trouble; reading: JudgedReading },
+  b: { trouble: Trouble; reading: JudgedReading },
+): number {
+  const isUrgent = (entry: typeof a) => (entry.trouble === 'past-upper-limit' ? 0 : 1)
+  return (
+    isUrgent(a) - isUrgent(b) ||
+    compareStandings(a.reading.standing, b.reading.standing) ||
+    TROUBLE_ORDER.indexOf(a.trouble) - TROUBLE_ORDER.indexOf(b.trouble) ||
+    a.reading.readingIndex - b.reading.readingIndex
+  )
+}
+
+/** The one thing to change first among judged readings, or null when nothing of heat is wrong. `roomC` null: not measured. */
+export function findFirstChange(
+  readings: readonly JudgedReading[],
+  roomC: number | null,
+): FirstChange | null {
+  const troubles = readings.flatMap((reading) => {
+    const trouble = findTrouble(reading)
+    return trouble === null ? [] : [{ trouble, reading }]
+  })
+  const [first] = troubles.sort(compareTroubles)
+  if (first === undefined) return null
+  const { trouble, reading } = first
+  const { low, high } = reading.range
+  const isTemperature = reading.parameter === 'temperature' && trouble !== 'past-upper-limit'
+  const targetC = isTemperature && low !== null && high !== null ? (low + high) / 2 : null
+  const isRoomKnown = roomC !== null && targetC !== null
+  const powerRatio = isRoomKnown ? findPowerRatio(targetC, roomC, reading) : null
+  const isRoomAtTarget = isRoomKnown && targetC - roomC <= RATIO_DIFFERENCE_FACTOR * reading.uncertainty
+  const rule = findChangeRule({ trouble, period: reading.period, powerRatio, isRoomAtTarget })
+  if (rule === null) return null
+  const needsFloor = rule.advice.includes('{floor}') && low !== null
+  return {
+    ruleId: rule.id,
+    readingIndex: reading.readingIndex,
+    isUrgent: rule.isUrgent || reading.limit.answer === 'past',
+    powerRatio: rule.advice.includes('{ratio}') || rule.advice.includes('{dim}') ? powerRatio : null,
+    targetC,
+    thermostatFloorC: needsFloor ? findThermostatFloor(low, THERMOSTAT_SWING_C, reading.uncertainty) : null,
+  }
+}
