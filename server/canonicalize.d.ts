@@ -1,0 +1,4 @@
+// The package's own types describe an ES module, while the file is CommonJS and exports the function itself.
+declare module 'canonicalize' {
+  export default function canonicalize(input: unknown): string | undefined
+}

@@ -1,0 +1,29 @@
+import { createHash } from 'node:crypto'
+
+/**
+ * A full reference reduced to what two compilers' ways of printing it share: lower case, no accents, letters and digits only,
+ * one space between words. Two references are the same study where these agree.
+ */
+export function normaliseReference(reference: string): string {
+  return reference
+    .normalize('NFKD')
+    .replace(/\p{M}/gu, '')
+    .toLowerCase()
+    .replace(/[^\p{L}\p{N}]+/gu, ' ')
+    .trim()
+}
+
+/** The key (SHA-256, hex) under which a full reference is found again, or null when it holds no word. */
+export function toReferenceKey(reference: string | null): string | null {
+  const normalised = reference === null ? '' : normaliseReference(reference)
+  return normalised === '' ? null : createHash('sha256').update(normalised, 'utf8').digest('hex')
+}
+
+/** A DOI as it is compared and stored: lower case, without resolver address or prefix; null when the text is no DOI. */
+export function toDoiKey(doi: string | null): string | null {
+  const bare = (doi ?? '')
+    .trim()
+    .toLowerCase()
+    .replace(/^(?:https?:\/\/(?:dx\.)?doi\.org\/|doi:\s*)/, '')
+  return /^10\.\d{4,9}\/\S+$/.test(bare) ? bare : null
+}
