@@ -66,7 +66,8 @@ const FIND_CONTRADICTIONS = {
   name: 'find-contradictions',
   text: `
     select
-      array(select id::text from unnest($1::uuid[]) id where not exists (select from source where source.id = id.id))
+      array(select cited.id::text from unnest($1::uuid[]) cited (id)
+        where not exists (select from source where source.id = cited.id))
         as "missingSources",
       array(
         select named.hash from jsonb_to_recordset($2::jsonb) as named (hash text, dataset_id text)
@@ -75,7 +76,8 @@ const FIND_CONTRADICTIONS = {
         )
       ) as "missingRecordSets",
       array(
-        select id from unnest($3::text[]) id where not exists (select from dataset_version where dataset_id = id)
+        select given.id from unnest($3::text[]) given (id)
+        where not exists (select from dataset_version where dataset_version.dataset_id = given.id)
       ) as "missingDatasets",
       -- Any one place where the item stands tells its page and kind: all others agree with it.
       array(
