@@ -21,12 +21,17 @@ export interface VapourPressures {
   highPa: number
 }
 
+/** Whether the formula of the saturation vapour pressure holds at a temperature: −100 to 200 °C. */
+export function hasSaturationPressure(temperatureC: number): boolean {
+  return temperatureC >= COLDEST_C && temperatureC <= HOTTEST_C
+}
+
 /**
  * Saturation vapour pressure over water in Pa at a temperature in °C: ASHRAE Handbook Fundamentals 2017, chapter 1, equation 6
  * (Hyland and Wexler), by psychrolib; at and below 0.01 °C that over ice, equation 5. Throws a RangeError outside −100 to 200 °C.
  */
 export function findSaturationPressurePa(temperatureC: number): number {
-  if (!(temperatureC >= COLDEST_C && temperatureC <= HOTTEST_C)) {
+  if (!hasSaturationPressure(temperatureC)) {
     throw new RangeError(`No saturation vapour pressure is known at ${temperatureC} °C.`)
   }
   return psychrolib.GetSatVapPres(temperatureC)

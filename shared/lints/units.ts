@@ -1,3 +1,4 @@
+import { COOL_SEASONS } from '../checker/selection.js'
 import type { EvidenceRow, PrintedNumbers } from '../evidence.js'
 import { parsePrintedNumber } from '../printed-numbers.js'
 import type { RangeRow } from '../ranges.js'
@@ -25,7 +26,7 @@ const LOOKS_LIKE_DEGC_UNDER_F_COOL = 32
 const LOOKS_LIKE_FRACTION_UP_TO = 1
 
 function isCool(row: RangeRow): boolean {
-  return row.season === 'brumation'
+  return COOL_SEASONS.includes(row.season)
 }
 
 /** Whether canonical numbers given in `unit` look like numbers in another one, at the place and time of `row`. */
