@@ -66,13 +66,17 @@ export function parseReading(form: ReadingForm): ParsedReading {
   }
 
   const values: number[] = []
+  /** Where each value stood in the form, so that an error lands on the field that was typed in. */
+  const places: number[] = []
   form.values.forEach((text, index) => {
     if (form.parameter === 'uv-index' && looksLikeZone(text)) {
       errors.push({ path: `values.${index}`, message: MESSAGES.zone })
       return
     }
     const value = read(`values.${index}`, text, false)
-    if (value !== null) values.push(value)
+    if (value === null) return
+    values.push(value)
+    places.push(index)
   })
   if (values.length === 0 && errors.length === 0) errors.push({ path: 'values.0', message: MESSAGES.missing })
 
@@ -109,6 +113,12 @@ export function parseReading(form: ReadingForm): ParsedReading {
     surface,
   }
   const parsed = readingSchema.safeParse(candidate)
-  if (!parsed.success) return { ok: false, errors: toFieldErrors(parsed.error) }
+  if (!parsed.success) {
+    const inForm = ({ path, message }: FieldError): FieldError => {
+      const place = /^values\.(\d+)$/.exec(path)?.[1]
+      return { path: place === undefined ? path : `values.${places[Number(place)] ?? place}`, message }
+    }
+    return { ok: false, errors: toFieldErrors(parsed.error).map(inForm) }
+  }
   return { ok: true, reading: parsed.data, questions: askBack(parsed.data) }
 }

@@ -12,6 +12,16 @@ export const REPEATS_MAX = 20
 /** Lowest emissivity that may be typed; below it a surface is a mirror and the instrument reads the room. */
 export const EMISSIVITY_MIN = 0.1
 
+/** Largest constant part of an accuracy, and largest step of a display, in the reading's unit. */
+export const ACCURACY_ABSOLUTE_MAX = 1000
+export const RESOLUTION_MAX = 100
+
+const NOT_EXACT = 'No instrument is exact. Leave this empty when its papers say nothing.'
+const emissivityNumberSchema = z
+  .number()
+  .min(EMISSIVITY_MIN, 'Emissivity lies between 0.1 and 1.')
+  .max(1, 'Emissivity lies between 0.1 and 1.')
+
 /** A reading is taken with the lights on (day) or off (night). */
 export const readingPeriodSchema = periodSchema.exclude(['any'])
 export type ReadingPeriod = z.infer<typeof readingPeriodSchema>
@@ -33,8 +43,8 @@ export const UNITS_OF_PARAMETER: Readonly<Record<Parameter, readonly [Unit, ...U
 export const accuracySchema = z
   .strictObject({
     form: z.enum(['limit', 'expanded']),
-    absolute: z.number().positive().max(1000).nullable(),
-    relativePercent: z.number().positive().max(100).nullable(),
+    absolute: z.number().positive(NOT_EXACT).max(ACCURACY_ABSOLUTE_MAX).nullable(),
+    relativePercent: z.number().positive(NOT_EXACT).max(100).nullable(),
     combine: z.enum(['larger', 'sum']),
   })
   .refine((accuracy) => accuracy.absolute !== null || accuracy.relativePercent !== null, {
@@ -45,9 +55,9 @@ export type Accuracy = z.infer<typeof accuracySchema>
 /** The surface an infrared thermometer looked at; `surroundings` is the temperature around it, in the reading's unit. */
 export const surfaceSchema = z.strictObject({
   material: surfaceMaterialSchema.nullable(),
-  emissivity: z.number().min(EMISSIVITY_MIN).max(1),
+  emissivity: emissivityNumberSchema,
   /** What the instrument was set to; 1 or 0.95 on most that cannot be set. */
-  emissivitySet: z.number().min(EMISSIVITY_MIN).max(1),
+  emissivitySet: emissivityNumberSchema,
   surroundings: z.number(),
 })
 export type Surface = z.infer<typeof surfaceSchema>
@@ -74,7 +84,7 @@ export const readingSchema = z
     /** Null when unstated: then the kind's default stands in, never zero. */
     accuracy: accuracySchema.nullable(),
     /** Smallest step of the display, in `unit`; null for the kind's default. */
-    resolution: z.number().positive().max(100).nullable(),
+    resolution: z.number().positive(NOT_EXACT).max(RESOLUTION_MAX).nullable(),
     /** Of a UV index: where the animal usually is, or the highest place that it can reach. Null for all else. */
     uvMeaning: uvMeaningSchema.nullable(),
     /** Of an infrared temperature whose surface is named; null for all else. */
