@@ -13,9 +13,9 @@ export function homePath(): string {
   return '/home'
 }
 
-/** `query` is a formatted search query without its question mark. */
-export function searchPath(query: string): string {
-  return query ? `/species?${query}` : '/species'
+/** `search` is a search written as the end of an address: empty, or from its question mark on. */
+export function searchPath(search: string): string {
+  return `/species${search}`
 }
 
 export function speciesPath(slug: string, revision?: number | string | null): string {
