@@ -18,12 +18,3 @@ export function toReferenceKey(reference: string | null): string | null {
   const normalised = reference === null ? '' : normaliseReference(reference)
   return normalised === '' ? null : createHash('sha256').update(normalised, 'utf8').digest('hex')
 }
-
-/** A DOI as it is compared and stored: lower case, without resolver address or prefix; null when the text is no DOI. */
-export function toDoiKey(doi: string | null): string | null {
-  const bare = (doi ?? '')
-    .trim()
-    .toLowerCase()
-    .replace(/^(?:https?:\/\/(?:dx\.)?doi\.org\/|doi:\s*)/, '')
-  return /^10\.\d{4,9}\/\S+$/.test(bare) ? bare : null
-}
