@@ -1,9 +1,9 @@
 import type { EntityManager } from 'typeorm'
 import { z } from 'zod'
+import { toDoiKey } from '../../shared/doi.js'
 import type { SourceList, SourcePage } from '../../shared/home.js'
 import type { SourceBrief } from '../../shared/sources.js'
 import { queryPrepared, type Prepared } from '../prepared.js'
-import { toDoiKey } from '../../shared/doi.js'
 import { toPageRef, toSourceBrief } from './json-fragments.js'
 import { readPlaceCursor, writePlaceCursor } from './place-cursor.js'
 import { toSearchWords } from './search-words.js'
@@ -78,11 +78,9 @@ export async function findSources(
   cursor: string | null,
 ): Promise<SourceList> {
   const [listing, id] = cursor === null ? ['', FIRST_ID] : readPlaceCursor(placeSchema, cursor)
-  const [answer] = await queryPrepared<FoundSources>(db, FIND_SOURCES, [
-    words.replaceAll('\0', ''),
-    listing,
-    id,
-  ])
+  const matching = toMatching(text, 3)
+  const values = [listing, id, ...matching.values]
+  const [answer] = await queryPrepared<FoundSources>(db, findSourcesStatement(matching), values)
   if (answer === undefined) throw new Error('The list of sources gave no answer')
   const shown = answer.found.slice(0, SOURCES_PAGE_SIZE)
   const last = shown.at(-1)
