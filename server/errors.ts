@@ -14,8 +14,9 @@ export class AppError extends Error {
     readonly title: string,
     message: string,
     readonly errors?: FieldError[],
+    options?: ErrorOptions,
   ) {
-    super(message)
+    super(message, options)
     this.name = new.target.name
   }
 
@@ -78,7 +79,7 @@ export class TooMany extends AppError {
 }
 
 export class Unavailable extends AppError {
-  constructor(message: string) {
-    super('unavailable', 503, 'Not available at the moment', message)
+  constructor(message: string, options?: ErrorOptions) {
+    super('unavailable', 503, 'Not available at the moment', message, undefined, options)
   }
 }

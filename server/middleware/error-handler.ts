@@ -20,8 +20,9 @@ const DATABASE_AWAY = /^(ECONNREFUSED|ECONNRESET|EPIPE|ENOENT|ETIMEDOUT|08\w{3}|
 export function errorHandler(log: Log): ErrorRequestHandler {
   return (error: unknown, request, response, next) => {
     const known = toAppError(error)
-    if (known === null) log.error({ err: error, requestId: request.id }, 'A request failed.')
-    else if (known.status >= 500) log.error({ err: error, requestId: request.id }, known.message)
+    const requestId = String(response.getHeader('X-Request-Id'))
+    if (known === null) log.error({ err: error, requestId }, 'A request failed.')
+    else if (known.status >= 500) log.error({ err: error, requestId }, known.message)
     if (response.headersSent) {
       next(error)
       return
@@ -29,7 +30,7 @@ export function errorHandler(log: Log): ErrorRequestHandler {
     const answer =
       known ??
       new AppError('internal', 500, 'Something failed here', 'Something failed here. It has been logged.')
-    const problem = { ...answer.toProblem(), requestId: String(request.id) }
+    const problem = { ...answer.toProblem(), requestId }
     response.status(answer.status).setHeader('Cache-Control', 'no-store')
     if (wantsPage(request)) {
       response.type('html').send(writeErrorPage(problem))
@@ -56,6 +57,7 @@ export function toAppError(error: unknown): AppError | null {
     case 'request.aborted':
     case 'request.size.invalid':
       return new InvalidInput('The body ended before it was whole.')
+    default:
   }
   if (code === UNIQUE_VIOLATION) return new Conflict('Somebody else saved the same thing first.')
   if (code !== null && DATABASE_AWAY.test(code)) {

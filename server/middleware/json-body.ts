@@ -6,14 +6,12 @@ import { UnsupportedContent } from '../errors.js'
 export const JSON_BODY_BYTES_MAX = 100_000
 
 /** Reads a JSON body; a body of any other kind is refused rather than passed on as empty. */
-export function jsonBody(): RequestHandler[] {
-  return [
-    (request, _response, next) => {
-      if (request.is('application/json') === false || request.get('content-type') === undefined) {
-        throw new UnsupportedContent('The body must be JSON, with the content type application/json.')
-      }
-      next()
-    },
-    json({ limit: JSON_BODY_BYTES_MAX }),
-  ]
+export function jsonBody(): RequestHandler {
+  const read = json({ limit: JSON_BODY_BYTES_MAX })
+  return (request, response, next) => {
+    if (typeof request.is('application/json') !== 'string') {
+      throw new UnsupportedContent('The body must be JSON, with the content type application/json.')
+    }
+    read(request, response, next)
+  }
 }

@@ -1,5 +1,6 @@
 import { isIPv6 } from 'node:net'
 import type { RequestHandler } from 'express'
+import type { Pool } from 'pg'
 import { RateLimiterMemory, RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible'
 import type { DataSource } from 'typeorm'
 import type { PostgresDriver } from 'typeorm/driver/postgres/PostgresDriver.js'
@@ -21,7 +22,7 @@ export function limitRate(dataSource: DataSource, limit: RateLimit): RequestHand
   const options = { keyPrefix: limit.name, points: limit.requests, duration: limit.seconds }
   const limiter = new RateLimiterPostgres({
     ...options,
-    storeClient: (dataSource.driver as PostgresDriver).master,
+    storeClient: (dataSource.driver as PostgresDriver).master as Pool,
     storeType: 'pool',
     tableName: 'rate_limit',
     tableCreated: true,

@@ -48,6 +48,7 @@ export async function createBuildRenderer(dist: string): Promise<PageRenderer> {
       const page = await entry.render(url, input)
       return assembleDocument(shell, page, writeLinks(page.modules, filesByModule, shell))
     },
+    close: () => Promise.resolve(),
   }
 }
 

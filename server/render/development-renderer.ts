@@ -15,7 +15,6 @@ export async function createDevelopmentRenderer(root: string, server: Server): P
     appType: 'custom',
     server: { middlewareMode: true, hmr: { server } },
   })
-  server.once('close', () => void vite.close())
   return {
     buildId: 'development',
     files: vite.middlewares,
@@ -24,5 +23,6 @@ export async function createDevelopmentRenderer(root: string, server: Server): P
       const entry = (await vite.ssrLoadModule('/src/entry-server.ts')) as ServerEntry
       return assembleDocument(shell, { ...(await entry.render(url, input)), cacheable: false }, '')
     },
+    close: () => vite.close(),
   }
 }

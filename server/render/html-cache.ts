@@ -22,6 +22,8 @@ export class CachedPage {
   constructor(
     readonly status: number,
     html: string,
+    /** Where the reader is sent instead, else null. */
+    readonly location: string | null = null,
   ) {
     this.#plain = Buffer.from(html, 'utf8')
     this.#tag = createHash('sha256').update(this.#plain).digest('base64url').slice(0, 22)

@@ -10,7 +10,7 @@ export interface Preferences {
 
 export interface RenderInput {
   /** Answers a read by its path below /api/v1, query included; throws an `AppError`. */
-  read(apiPath: string): Promise<unknown>
+  read: (apiPath: string) => Promise<unknown>
   preferences: Preferences
   /** The origin readers see, for canonical addresses. */
   origin: string
@@ -52,6 +52,8 @@ export interface PageRenderer {
   files: RequestHandler
   /** Renders the page at `url` (path and query). */
   render(url: string, input: RenderInput): Promise<PageDocument>
+  /** Lets go of whatever it holds open. */
+  close(): Promise<void>
 }
 
 /** The module that the client builds for the server. */
