@@ -56,8 +56,9 @@ export async function readTable(path: string, expectedHeader: readonly string[])
         line += 1 + data.reduce((sum, cell) => sum + (cell.match(/\n/g)?.length ?? 0), 0)
         const sentence = findFault(data, errors, at)
         if (sentence !== null) {
-          parser.abort()
+          // Before the end of the parsing, which counts as its success.
           refuse(sentence)
+          parser.abort()
         }
       },
       complete: () => {
@@ -73,10 +74,12 @@ export async function readTable(path: string, expectedHeader: readonly string[])
     })
 
     function findFault(data: string[], errors: Papa.ParseError[], at: number): string | null {
-      if (errors.some(({ code }) => code === 'MissingQuotes')) {
+      if (errors.some(({ code }) => code === 'InvalidQuotes')) {
+        return `Line ${at} has a quotation mark in the wrong place.`
+      }
+      if (errors.length > 0) {
         return `The file ends inside the quotation marks opened on line ${at}, so it is cut off.`
       }
-      if (errors.length > 0) return `Line ${at} has a quotation mark in the wrong place.`
       if (afterEnd !== null) return `Line ${afterEnd} is empty.`
       if (isHeader) {
         isHeader = false
