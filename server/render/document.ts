@@ -12,12 +12,12 @@ export function assembleDocument(shell: string, page: RenderedPage, links: strin
   const missing = PLACES.find((place) => !shell.includes(place))
   if (missing !== undefined) throw new Error(`The client's shell has no ${missing}.`)
   const state = `<script type="application/json" id="page-state">${page.state}</script>`
-  // Each piece is put in by a function: a dollar sign in a page's text is no pattern.
+  // The last place first, so that no piece is taken for a place; by functions, so that no dollar sign is a pattern.
   const html = shell
     .replace(HTML_TAG, (tag) => (page.htmlAttrs === '' ? tag : `<html ${page.htmlAttrs}>`))
     .replace(BODY_TAG, (tag) => (page.bodyAttrs === '' ? tag : `<body ${page.bodyAttrs}>`))
     .replace('<!--state-->', () => state)
-    .replace('<!--head-->', () => [page.headTags, page.css, links].filter(Boolean).join('\n'))
     .replace('<!--app-->', () => page.html)
+    .replace('<!--head-->', () => [page.headTags, page.css, links].filter(Boolean).join('\n'))
   return { status: page.status, location: page.location, html, cacheable: page.cacheable }
 }
