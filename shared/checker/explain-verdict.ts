@@ -1,12 +1,4 @@
-import {
-  countDecimals,
-  formatNumber,
-  formatRowBounds,
-  formatRowLimit,
-  formatValue,
-  speakBounds,
-  toReaderUnit,
-} from '../format.js'
+import { countDecimals, formatNumber, toReaderUnit } from '../format.js'
 import type { ReaderUnits } from '../format.js'
 import { UNIT_LABELS } from '../labels.js'
 import type { RangeRow } from '../ranges.js'
@@ -14,6 +6,7 @@ import { differenceFromCanonical } from '../units.js'
 import type { Unit } from '../units.js'
 import type { ReadingVerdict } from './check.js'
 import { writeProbability } from './explain-probability.js'
+import { writeNumber, writeValue } from './explain-value.js'
 import type { RangeAnswer, RangeVerdict } from './verdict.js'
 
 /** A verdict in words: one sentence that holds both answers, and what else should be known of it. */
@@ -22,22 +15,28 @@ export interface ExplainedVerdict {
   notes: string[]
 }
 
-const plain = (text: string) => text.replaceAll('\u00a0', ' ')
-
 function findRow(verdict: ReadingVerdict, itemId: string | null): RangeRow | null {
   return verdict.rows.find((range) => range.itemId === itemId)?.row ?? null
 }
 
 function writeBound(row: RangeRow, side: 'low' | 'high', units: ReaderUnits): string {
-  const bounds = formatRowBounds(row, units)
-  return `${bounds[side] ?? ''} ${bounds.unit}`
+  const bound = row[side]
+  return bound === null ? '' : writeValue(bound, toReaderUnit(row.typedUnit, units))
+}
+
+function writeSpan(row: RangeRow, units: ReaderUnits): string {
+  const { low, high } = row
+  if (low === null || high === null || low === high)
+    return writeBound(row, low === null ? 'high' : 'low', units)
+  const shown = toReaderUnit(row.typedUnit, units)
+  return `${writeNumber(low, shown)} to ${writeValue(high, shown)}`
 }
 
 /** "Above 46 °C", "inside 40 to 46 °C": one answer about a range, begun in lower case. */
 function sayAnswer(answer: RangeAnswer, row: RangeRow, units: ReaderUnits): string {
   switch (answer) {
     case 'inside':
-      return `inside ${speakBounds(formatRowBounds(row, units))}`
+      return `inside ${writeSpan(row, units)}`
     case 'low':
       return `below ${writeBound(row, 'low', units)}`
     case 'high':
@@ -78,8 +77,7 @@ function sayLimit(verdict: ReadingVerdict, units: ReaderUnits): string {
   const { answer, side, lower, upper } = verdict.limit
   const write = (which: 'lower' | 'upper') => {
     const limit = which === 'lower' ? lower : upper
-    const row = limit && findRow(verdict, limit.itemId)
-    return row && plain(formatRowLimit(row, which === 'lower' ? 'lowerLimit' : 'upperLimit', units) ?? '')
+    return limit && writeValue(limit.value, toReaderUnit(verdict.measured.unit, units))
   }
   if (answer === 'no-limit') return 'no limit is cited'
   if (answer === 'clear') {
@@ -141,7 +139,7 @@ function listNotes(verdict: ReadingVerdict, units: ReaderUnits): string[] {
   }
   if (measured.uncorrectedValue !== null) {
     notes.push(
-      `The instrument showed ${plain(formatValue(measured.uncorrectedValue, shown))}; with the emissivity of the surface that is ${plain(formatValue(measured.value, shown))}. This takes all radiation together, an approximation good to about 0.2 °C.`,
+      `The instrument showed ${writeValue(measured.uncorrectedValue, shown)}; with the emissivity of the surface that is ${writeValue(measured.value, shown)}. This takes all radiation together, an approximation good to about 0.2 °C.`,
     )
   }
   if (measured.parts.some(({ from, isDefault }) => from === 'accuracy' && isDefault)) {

@@ -1,4 +1,4 @@
-import { formatNumber, formatValue, toReaderUnit } from '../format.js'
+import { formatNumber, toReaderUnit } from '../format.js'
 import type { ReaderUnits } from '../format.js'
 import { UNIT_LABELS } from '../labels.js'
 import { differenceFromCanonical, fromCanonical } from '../units.js'
@@ -12,12 +12,11 @@ import type {
   PhysiologyCaution,
   Question,
 } from './check.js'
+import { writeValue } from './explain-value.js'
 import { THERMOSTAT_SWING_C } from './policy.js'
 
-const plain = (text: string) => text.replaceAll('\u00a0', ' ')
-
 function writeTemperature(temperatureC: number, units: ReaderUnits): string {
-  return plain(formatValue(temperatureC, units.temperature))
+  return writeValue(temperatureC, units.temperature)
 }
 
 /** What to ask the person about a reading that looks like a slip. `value` is the reading as typed. */
