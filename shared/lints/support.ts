@@ -1,8 +1,8 @@
 import { PHYSICAL_BOUNDS } from '../checker/physical-bounds.js'
+import { findYear } from '../citation.js'
 import { canSupportRange } from '../evidence-policy.js'
 import { summariseEvidence } from '../evidence-support.js'
 import type { CitedRange, SpeciesPage } from '../species.js'
-import type { SourceBrief } from '../sources.js'
 import type { Lint } from './lint.js'
 import { makeLint } from './lint-table.js'
 
@@ -85,16 +85,12 @@ export function lintIndependence(ranges: readonly CitedRange[]): Lint[] {
   return lints
 }
 
-/** The year a source was issued, where its CSL fields tell. */
-function findYear(source: SourceBrief | undefined): number | null {
-  return source?.csl.issued?.['date-parts']?.[0]?.[0] ?? null
-}
-
 /** Informs of evidence issued more than 30 years before `year`, a range's evidence in one finding. */
 export function lintAge(page: Pick<SpeciesPage, 'ranges' | 'sources'>, year: number): Lint[] {
   return page.ranges.flatMap((range) => {
     const old = range.evidence.filter(({ row }) => {
-      const issued = findYear(page.sources[row.sourceId])
+      const source = page.sources[row.sourceId]
+      const issued = source === undefined ? null : findYear(source.csl)
       return issued !== null && year - issued > OLD_EVIDENCE_YEARS
     })
     const itemIds = old.map(({ itemId }) => itemId)
