@@ -29,7 +29,15 @@ export function revisionsPath(slug: string, cursor?: string | null): string {
 export function physiologyRecordsPath(
   slug: string,
   itemId: string,
-  query: { quantity?: string; lifeStage?: string; source?: string | null; cursor?: string | null },
+  query: {
+    quantity?: string
+    lethalPercent?: number | null
+    lifeStage?: string
+    level?: string
+    source?: string | null
+    revision?: number | null
+    cursor?: string | null
+  },
 ): string {
   return withQuery(
     `/species/${encodeURIComponent(slug)}/physiology/${encodeURIComponent(itemId)}/records`,

@@ -1,3 +1,4 @@
+import type { PageRequestAnswer } from '../../shared/page-requests.js'
 import type { SearchAnswer } from '../../shared/search.js'
 import { postJson } from './client.js'
 import { searchPath } from './paths.js'
@@ -12,7 +13,7 @@ export function suggestionsPath(words: string): string {
 
 export type Suggestions = Pick<SearchAnswer, 'items' | 'total' | 'nearest'>
 
-/** Counts one wish for a page that does not exist yet. */
-export async function askForPage(name: string): Promise<void> {
-  await postJson('/page-requests', { name })
+/** Counts one wish for a page that does not exist yet, and gives how often it was wished for. */
+export async function askForPage(name: string): Promise<PageRequestAnswer> {
+  return (await postJson('/page-requests', { name })) as PageRequestAnswer
 }
