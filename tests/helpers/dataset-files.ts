@@ -26,6 +26,11 @@ export function toCsv(rows: CsvRow[]): string {
   return `${Papa.unparse([[...recordColumns], ...data], { newline: '\n' })}\n`
 }
 
+/** A row with every column, blank where it is not given. */
+export function toCells(row: CsvRow): Record<string, string> {
+  return Object.fromEntries(recordColumns.map((column) => [column, row[column] ?? '']))
+}
+
 /** A row as AmphiTherm prints it, of a named frog that is in the list of names; change what the test is about. */
 export function makeAmphithermRow(number: number, part: CsvRow = {}): CsvRow {
   return {
