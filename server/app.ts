@@ -14,6 +14,7 @@ import type { SiteEpoch } from './render/site-epoch.js'
 import { api } from './routes/api.js'
 import { health } from './routes/health.js'
 import { servePages } from './routes/pages.js'
+import { preferences } from './routes/preferences.js'
 import { createReader } from './routes/read.js'
 import { listReads } from './routes/reads.js'
 import { sitemap } from './routes/sitemap.js'
@@ -41,6 +42,7 @@ export function createApp({ dataSource, config, log, renderer, epoch }: AppParts
   app.use('/api/v1', api(dataSource, config, reads))
   app.use(requireSameOrigin(origin))
   app.use(sitemap(dataSource, origin))
+  app.use(preferences(origin))
   app.use('/api', refuseUnknownAddress)
   app.use(serveFiles(renderer, config))
   app.use(servePages({ renderer, epoch, origin, read: (path) => reader(dataSource.manager, path) }))
