@@ -76,6 +76,10 @@ export const CLOUDWOOD_CLIMBER: DemonstrationSpecies = {
             between('standards-board', 'table 5, row 1', '16', '20'),
             meanOf('cloud-canopy', 'table 3', '17.8', '1.9', 60),
           ]),
+          temperature('substrate', 'day', ['15.5', '18.5'], { upperLimit: '25' }, [
+            between('hollow-manual', 'p. 53', '15', '19'),
+            meanOf('cloud-canopy', 'table 3', '16.9', '1.7', 60),
+          ]),
           // The deliberate flaw of this page: the warm end is to be wetter than any air that suits the cool end.
           humidity('warm-end-air', 'day', ['85', '95'], {}, [
             between('hollow-manual', 'p. 54', '80', '90'),

@@ -65,6 +65,10 @@ export const DOWN_TORTOISE: DemonstrationSpecies = {
             between('standards-board', 'table 8, row 1', '16', '20'),
             meanOf('field-stations', 'table 5, Sarn Downs', '17.2', '1.9', 402),
           ]),
+          temperature('warm-hide', 'day', ['24', '27.5'], { upperLimit: '33' }, [
+            between('hollow-manual', 'p. 72', '24', '28'),
+            betweenF('tortoise-keeping', 'year 2', '75', '82'),
+          ]),
           temperature('warm-hide', 'night', ['18', '22'], { lowerLimit: '11' }, [
             between('hollow-manual', 'p. 72', '18', '22'),
             betweenF('tortoise-keeping', 'year 2', '64', '72'),
@@ -86,6 +90,10 @@ export const DOWN_TORTOISE: DemonstrationSpecies = {
           temperature('shade', 'day', ['20', '25.5'], { upperLimit: '31' }, [
             between('standards-board', 'table 8, row 1', '20', '25'),
             meanOf('down-tortoises', 'table 3', '23.1', '2.8', 52),
+          ]),
+          temperature('substrate', 'day', ['22.5', '27'], { upperLimit: '34' }, [
+            between('hollow-manual', 'p. 73', '22', '27'),
+            meanOf('down-tortoises', 'table 3', '25.1', '3.0', 52),
           ]),
           temperature(
             'substrate',

@@ -59,6 +59,10 @@ export const DRIPLEAF_FROG: DemonstrationSpecies = {
             between('standards-board', 'table 12, row 1', '18', '21'),
             betweenF('frog-room', 'week 2', '65', '70'),
           ]),
+          temperature('shade', 'day', ['21.5', '24'], { lowerLimit: '15', upperLimit: '28' }, [
+            between('hollow-manual', 'p. 92', '21', '24'),
+            meanOf('drip-leaf', 'table 3', '22.7', '1.3', 74),
+          ]),
           temperature('humid-hide', 'any', ['21', '23.5'], { lowerLimit: '15', upperLimit: '28' }, [
             between('hollow-manual', 'p. 92', '21', '24'),
             meanOf('drip-leaf', 'table 3', '22.4', '1.2', 74),

@@ -41,6 +41,10 @@ export const HUSH_GECKO: DemonstrationSpecies = {
             between('standards-board', 'table 4, row 1', '28', '32'),
             meanOf('night-rock', 'table 2', '30.4', '1.6', 37),
           ]),
+          temperature('basking-air', 'day', ['28', '30'], { upperLimit: '36' }, [
+            between('hollow-manual', 'p. 43', '27', '30'),
+            meanOf('night-rock', 'table 2', '29.2', '1.5', 37),
+          ]),
           // The deliberate flaw of this page: a hide on a heated slab, warmer than the place to bask.
           temperature('warm-hide', 'day', ['31.5', '33'], { lifeStage: 'adult', upperLimit: '38' }, [
             meanOf('night-rock', 'table 3', '32.6', '1.5', 29),
@@ -81,6 +85,14 @@ export const HUSH_GECKO: DemonstrationSpecies = {
           temperature('humid-hide', 'any', ['25', '28.5'], { lowerLimit: '16', upperLimit: '33' }, [
             between('hollow-manual', 'p. 45', '25', '28'),
             betweenF('gecko-notes', 'part 4', '78', '84'),
+          ]),
+          temperature('shade', 'day', ['23', '26'], { upperLimit: '32' }, [
+            between('standards-board', 'table 4, row 1', '22', '26'),
+            meanOf('field-stations', 'table 6, Ninefold Scarp', '24.6', '1.9', 405),
+          ]),
+          temperature('substrate', 'day', ['24', '27'], { lowerLimit: '15', upperLimit: '33' }, [
+            between('hollow-manual', 'p. 45', '24', '27'),
+            meanOf('field-stations', 'table 7, Ninefold Scarp', '25.3', '2.0', 405),
           ]),
           temperature(
             'substrate',

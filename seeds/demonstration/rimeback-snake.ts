@@ -74,6 +74,14 @@ const summer: DemonstrationRange[] = [
     between('hollow-manual', 'p. 63', '20', '24'),
     betweenF('rimeback-breeding', 'brood 1', '70', '76'),
   ]),
+  temperature('shade', 'day', ['18', '22'], { ...active, upperLimit: '28' }, [
+    between('standards-board', 'table 6, row 1', '17', '22'),
+    meanOf('field-stations', 'table 6, Hollin Fen', '20.1', '2.1', 390),
+  ]),
+  temperature('substrate', 'day', ['19.5', '23'], { ...active, upperLimit: '29' }, [
+    between('hollow-manual', 'p. 63', '19', '24'),
+    meanOf('fen-snakes', 'table 3', '21.3', '2.1', 46),
+  ]),
   humidity('warm-end-air', 'day', ['45', '65'], { ...active, upperLimit: '85' }, [
     between('standards-board', 'table 6, row 1', '45', '65'),
     meanOf('field-stations', 'table 8, Hollin Fen', '54', '10', 390),

@@ -4,7 +4,8 @@ import type { Lint, LintId, LintLevel } from './lint.js'
 export const LINTS: Readonly<Record<LintId, { level: LintLevel; sentence: string }>> = {
   'low-over-high': {
     level: 'blocks',
-    sentence: 'The low bound is over the high bound. Swap them, or correct the one that is wrong.',
+    sentence:
+      'A low bound is over its high bound, or a lower limit over its upper limit. Swap them, or correct the one that is wrong.',
   },
   'limit-inside-range': {
     level: 'blocks',

@@ -5,14 +5,10 @@ import { summariseEvidence } from '../evidence-support.js'
 import type { CitedRange, SpeciesPage } from '../species.js'
 import type { Lint } from './lint.js'
 import { makeLint } from './lint-table.js'
+import { ENVELOPE_ROUNDING, OLD_EVIDENCE_YEARS } from './policy.js'
 
-/** Ranges are adopted to a tenth at the finest; half of that is rounding, not reach. Our policy. */
-const ROUNDING = 0.05
 /** Half of 0.1 is not exact in binary. */
 const FLOAT_SLACK = 1e-9
-
-/** Evidence older than this many years is pointed out. */
-export const OLD_EVIDENCE_YEARS = 30
 
 /** The pieces of evidence that can support a range, ids included. */
 function listSupporting(range: CitedRange): CitedRange['evidence'] {
@@ -47,7 +43,7 @@ function reachesPastEvidence(range: CitedRange): boolean {
   const { low, high, parameter } = range.row
   const ends = PHYSICAL_BOUNDS[parameter]
   const isPhysicalEnd = (value: number) => value === ends.low || value === ends.high
-  const slack = ROUNDING + FLOAT_SLACK
+  const slack = ENVELOPE_ROUNDING + FLOAT_SLACK
   const isTooLow =
     low !== null && !isPhysicalEnd(low) && (envelope.low === null || low < envelope.low - slack)
   const isTooHigh =

@@ -7,23 +7,15 @@ import { fromCanonical, toCanonical } from '../units.js'
 import type { Unit } from '../units.js'
 import type { Lint } from './lint.js'
 import { makeLint } from './lint-table.js'
-
-/*
- * Where a temperature begins to look like one of the other unit. Our policy, from memory; generous, so that no setting in use
- * is asked about.
- */
-/** A °C value over this looks like °F: "90" for a warm end. */
-const LOOKS_LIKE_DEGF_OVER_C = 60
-/** Under a lamp surfaces really get hotter. */
-const LOOKS_LIKE_DEGF_OVER_C_BASKING = 70
-/** In a cool season nothing is warm: "50" is °F. */
-const LOOKS_LIKE_DEGF_OVER_C_COOL = 35
-/** A °F value below this looks like °C: "28" for a cool end. */
-const LOOKS_LIKE_DEGC_UNDER_F = 45
-/** In a cool season 40 °F is right, and nothing freezes. */
-const LOOKS_LIKE_DEGC_UNDER_F_COOL = 32
-/** A humidity up to this looks like a fraction: "0.6" for 60 %. */
-const LOOKS_LIKE_FRACTION_UP_TO = 1
+import {
+  LOOKS_LIKE_DEGC_UNDER_F,
+  LOOKS_LIKE_DEGC_UNDER_F_COOL,
+  LOOKS_LIKE_DEGF_OVER_C,
+  LOOKS_LIKE_DEGF_OVER_C_BASKING,
+  LOOKS_LIKE_DEGF_OVER_C_COOL,
+  LOOKS_LIKE_FRACTION_UP_TO,
+  LOOKS_LIKE_IRRADIANCE_OVER,
+} from './policy.js'
 
 function isCool(row: RangeRow): boolean {
   return COOL_SEASONS.includes(row.season)
@@ -36,6 +28,7 @@ function looksLikeOtherUnit(row: RangeRow, canonical: readonly number[], unit: U
     const highest = Math.max(...canonical)
     return highest > 0 && highest <= LOOKS_LIKE_FRACTION_UP_TO
   }
+  if (row.parameter === 'uv-index') return canonical.some((value) => value > LOOKS_LIKE_IRRADIANCE_OVER)
   if (row.parameter !== 'temperature') return false
   if (unit === 'degF') {
     const least = isCool(row) ? LOOKS_LIKE_DEGC_UNDER_F_COOL : LOOKS_LIKE_DEGC_UNDER_F
