@@ -1,3 +1,4 @@
+import type { PrintedNumbers, Statement } from './evidence.js'
 import { UNIT_LABELS } from './labels.js'
 import type { RangeRow, TypedBounds } from './ranges.js'
 import { fromCanonical } from './units.js'
@@ -177,4 +178,22 @@ export function formatDate(iso: string, locale: string): string {
 /** The ISO form of the same day, for the hover and for machines: "2026-10-03". */
 export function formatIsoDate(iso: string): string {
   return new Date(iso).toISOString().slice(0, 10)
+}
+
+/** A statement's numbers exactly as its source prints them, with the printed unit: "38.2 ± 1.4 °C". */
+export function writePrinted(printed: PrintedNumbers, statement: Statement): string {
+  const unit = `${NO_BREAK_SPACE}${UNIT_LABELS[printed.unit]}`
+  const { low, high, mean, sd } = printed
+  switch (statement) {
+    case 'interval':
+      return `${writeBounds({ low, high, unit: '' })}${unit}`
+    case 'mean-sd':
+      return `${mean ?? '?'}${sd === null ? '' : `${NO_BREAK_SPACE}±${NO_BREAK_SPACE}${sd}`}${unit}`
+    case 'value':
+      return `${mean ?? '?'}${unit}`
+    case 'at-least':
+      return `at least${NO_BREAK_SPACE}${low ?? '?'}${unit}`
+    case 'at-most':
+      return `at most${NO_BREAK_SPACE}${high ?? '?'}${unit}`
+  }
 }

@@ -12,6 +12,7 @@ import {
   formatValue,
   speakBounds,
   writeBoundsWithUnit,
+  writePrinted,
 } from '../../shared/format.js'
 import type { RangeRow } from '../../shared/ranges.js'
 
@@ -107,6 +108,22 @@ describe('ranges', () => {
     expect(formatRowLimit(row({}), 'upperLimit', celsius)).toBeNull()
     expect(plain(formatRowLimit(row({ upperLimit: 54 }), 'upperLimit', celsius))).toBe('54 °C')
     expect(plain(formatRowLimit(row({ upperLimit: 54 }), 'upperLimit', fahrenheit))).toBe('129 °F')
+  })
+})
+
+describe('printed numbers', () => {
+  const none = { low: null, high: null, mean: null, sd: null }
+
+  test('are written as their source prints them, in its unit', () => {
+    expect(plain(writePrinted({ ...none, low: '38', high: '44.0', unit: 'degC' }, 'interval'))).toBe(
+      '38 – 44.0 °C',
+    )
+    expect(plain(writePrinted({ ...none, mean: '95.2', sd: '1.4', unit: 'degF' }, 'mean-sd'))).toBe(
+      '95.2 ± 1.4 °F',
+    )
+    expect(plain(writePrinted({ ...none, mean: '43', unit: 'degC' }, 'value'))).toBe('43 °C')
+    expect(plain(writePrinted({ ...none, low: '70', unit: 'percentRh' }, 'at-least'))).toBe('at least 70 %')
+    expect(plain(writePrinted({ ...none, high: '7', unit: 'uvi' }, 'at-most'))).toBe('at most 7 UVI')
   })
 })
 
