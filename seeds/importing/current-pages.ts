@@ -10,7 +10,7 @@ export interface CurrentPage {
 }
 
 /** Which page bears a name. */
-export interface NamedPage {
+interface NamedPage {
   speciesId: string
   name: string
   isScientific: boolean
@@ -61,25 +61,38 @@ export async function findPagesOfDataset(
   return new Set(rows.map(({ id }) => id))
 }
 
-const kinds = Object.entries(ROW_MAPPINGS)
+const states = Object.entries(ROW_MAPPINGS).map(([kind, mapping]) => ({
+  kind,
+  table: mapping.table,
+  json: mapping.toJson(`${kind}_state`),
+}))
+
+const CURRENT_PAGES = `
+  select species.id as "speciesId", species.current_revision_id as "revisionId",
+    json_agg(
+      json_build_object('itemId', item.item_id, 'parentItemId', item.parent_item_id, 'kind', item.kind,
+        'row', case item.kind ${states.map(({ kind, json }) => `when '${kind}' then ${json}`).join(' ')} end)
+      order by item.ordinal
+    ) as items
+  from species
+  join revision_item item on item.revision_id = species.current_revision_id
+  ${states
+    .map(
+      ({ kind, table }) =>
+        `left join ${table} ${kind}_state on item.kind = '${kind}' and ${kind}_state.hash = item.row_hash`,
+    )
+    .join(' ')}
+  where species.id = any($1)
+  group by species.id`
 
 /** Reads the current content of many pages in one trip. */
 export async function readCurrentPages(
   db: EntityManager,
   speciesIds: readonly string[],
 ): Promise<Map<string, CurrentPage>> {
-  const rows: { speciesId: string; revisionId: string; items: unknown[] }[] = await db.query(
-    `select species.id as "speciesId", species.current_revision_id as "revisionId",
-       json_agg(json_build_object('itemId', item.item_id, 'parentItemId', item.parent_item_id, 'kind', item.kind,
-         'row', case item.kind ${kinds.map(([kind, { toJson }]) => `when '${kind}' then ${toJson(`${kind}_state`)}`).join(' ')} end
-       ) order by item.ordinal) as items
-     from species
-     join revision_item item on item.revision_id = species.current_revision_id
-     ${kinds.map(([kind, { table }]) => `left join ${table} ${kind}_state on item.kind = '${kind}' and ${kind}_state.hash = item.row_hash`).join(' ')}
-     where species.id = any($1)
-     group by species.id`,
-    [speciesIds],
-  )
+  const rows: { speciesId: string; revisionId: string; items: unknown[] }[] = await db.query(CURRENT_PAGES, [
+    speciesIds,
+  ])
   return new Map(
     rows.map(({ speciesId, revisionId, items }) => [
       speciesId,
