@@ -1,4 +1,5 @@
 // The package's own types describe an ES module, while the file is CommonJS and exports the function itself.
 declare module 'canonicalize' {
-  export default function canonicalize(input: unknown): string | undefined
+  function canonicalize(input: unknown): string | undefined
+  export = canonicalize
 }

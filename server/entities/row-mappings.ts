@@ -87,9 +87,9 @@ export interface RowMapping {
   /** Column names, quoted, with their PostgreSQL types; `hash` not among them. */
   columns: ReadonlyMap<string, string>
   /** The row's content by column name. */
-  toColumns(row: Content): Record<string, unknown>
+  toColumns: (row: Content) => Record<string, unknown>
   /** An SQL expression that gives the row's content as JSON, read from the table under an alias. */
-  toJson(alias: string): string
+  toJson: (alias: string) => string
 }
 
 function quote(column: string): string {

@@ -8,11 +8,11 @@ function sha256(text: string): string {
 
 test('a content hash is that of the canonical form that RFC 8785 gives for its sample object', () => {
   // RFC 8785, section 3.2.2 (input) and section 3.2.3 (canonical form).
-  const input = {
-    numbers: [333333333.33333329, 1e30, 4.5, 2e-3, 0.000000000000000000000000001],
-    string: '\u20ac$\u000F\u000aA\'\u0042\u0022\u005c\\"/',
-    literals: [null, true, false],
-  }
+  const input: unknown = JSON.parse(String.raw`{
+    "numbers": [333333333.33333329, 1E30, 4.50, 2e-3, 0.000000000000000000000000001],
+    "string": "\u20ac$\u000F\u000aA'\u0042\u0022\u005c\\\"\/",
+    "literals": [null, true, false]
+  }`)
   const canonical =
     '{"literals":[null,true,false],"numbers":[333333333.3333333,1e+30,4.5,0.002,1e-27],' +
     '"string":"€$\\u000f\\nA\'B\\"\\\\\\\\\\"/"}'

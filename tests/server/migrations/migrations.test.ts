@@ -1,4 +1,4 @@
-import { DataSource } from 'typeorm'
+import type { DataSource } from 'typeorm'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { createDataSource } from '../../../server/data-source.js'
 import { migrate } from '../../../server/migrate.js'
