@@ -10,27 +10,22 @@ import { searchSpecies } from '../queries/search.js'
 import type { CountStore } from '../queries/search.js'
 import { findSourcePage, findSources } from '../queries/sources.js'
 import { findSpeciesPageJson } from '../queries/species.js'
+import { revisionNumberSchema, slugSchema } from './page-key.js'
 import { defineRead, JsonText, noParameters } from './read.js'
 import type { Read } from './read.js'
 
-const SLUG_LENGTH_MAX = 200
 const CURSOR_LENGTH_MAX = 2000
 const TEXT_LENGTH_MAX = 200
 /** A source that could not be resolved is named by its reference as printed. */
 const REFERENCE_LENGTH_MAX = 2000
-/** PostgreSQL's largest int. */
-const REVISION_NUMBER_MAX = 2_147_483_647
 
-const slugSchema = z
-  .string()
-  .max(SLUG_LENGTH_MAX)
-  .regex(/^[a-z0-9-]+$/)
 const cursorSchema = z.string().min(1).max(CURSOR_LENGTH_MAX).optional()
-const revisionNumberSchema = z
+/** A revision's number as text. */
+const revisionTextSchema = z
   .string()
-  .regex(/^[1-9]\d{0,9}$/, 'A revision is a whole number from 1 on.')
+  .regex(/^[1-9]\d*$/, 'A revision is a whole number from 1 on.')
   .transform(Number)
-  .refine((number) => number <= REVISION_NUMBER_MAX, 'There are not so many revisions.')
+  .pipe(revisionNumberSchema)
 
 /** A search as `shared/search-query.ts` reads it, its errors by parameter. */
 const searchParametersSchema = z
@@ -62,7 +57,7 @@ export function listReads(countsNow: () => CountStore | null): Read[] {
     defineRead({
       path: '/species/:slug',
       params: z.strictObject({ slug: slugSchema }),
-      query: z.strictObject({ revision: revisionNumberSchema.optional() }),
+      query: z.strictObject({ revision: revisionTextSchema.optional() }),
       async read(db, { params, query }) {
         const text = await findSpeciesPageJson(db, params.slug, query.revision ?? null)
         return text === null ? null : new JsonText(text)
@@ -83,7 +78,7 @@ export function listReads(countsNow: () => CountStore | null): Read[] {
         lifeStage: recordLifeStageSchema.optional(),
         level: z.enum(['study', 'summary']).optional(),
         source: z.string().min(1).max(REFERENCE_LENGTH_MAX).optional(),
-        revision: revisionNumberSchema.optional(),
+        revision: revisionTextSchema.optional(),
         cursor: cursorSchema,
       }),
       read(db, { params, query: { cursor, revision, ...filter } }) {

@@ -39,7 +39,7 @@ export function createTestRenderer(): PageRenderer & { renders: () => number } {
     close: () => Promise.resolve(),
     async render(url, input) {
       renders += 1
-      const text = await describe(url, input)
+      const text = await writeText(url, input)
       const { status, body } =
         typeof text === 'string' ? { status: 200, body: text } : { status: text, body: '' }
       const { temperatureUnit, lengthUnit, theme } = input.preferences
@@ -49,7 +49,7 @@ export function createTestRenderer(): PageRenderer & { renders: () => number } {
   }
 }
 
-async function describe(url: string, input: RenderInput): Promise<string | number> {
+async function writeText(url: string, input: RenderInput): Promise<string | number> {
   if (url === '/broken') throw new Error('The renderer failed.')
   if (!url.startsWith('/species/')) return url
   try {
