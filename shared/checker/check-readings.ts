@@ -18,7 +18,7 @@ import {
 } from './verdict.js'
 
 function judgeReading(
-  page: Pick<CheckPage, 'ranges'>,
+  page: Pick<CheckPage, 'ranges' | 'revision'>,
   asked: Pick<CheckInput, 'season' | 'lifeStage'>,
   reading: Reading,
   readingIndex: number,
@@ -35,6 +35,7 @@ function judgeReading(
   const lending = [selection.lower?.range, selection.upper?.range].filter((row) => row !== undefined)
   return {
     readingIndex,
+    revisionNumber: page.revision.number,
     measured,
     standing: toStanding(limit, range),
     isGreen: isGreen(limit, range),

@@ -81,6 +81,8 @@ export const otherRowSchema = z.strictObject({
 /** The answer for one reading. `range` and `limit` are the worst over all rows that apply; neither hides the other. */
 export const readingVerdictSchema = z.strictObject({
   readingIndex: z.int().nonnegative(),
+  /** The revision whose rows were judged by. */
+  revisionNumber: z.int().positive(),
   measured: measuredSchema,
   standing: standingSchema,
   /** True for `inside` with `clear` or `no-limit` only. */

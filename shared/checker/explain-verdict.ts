@@ -96,6 +96,9 @@ function capitalise(text: string): string {
   return text.charAt(0).toUpperCase() + text.slice(1)
 }
 
+/** What taking all radiation together costs, by the check values' own estimate. */
+const TOTAL_RADIATION_ERROR_C = 0.2
+
 /** A canonical difference in a reader's unit, cut to the digits that leave it true: "±0.6 °C". */
 function writeTolerance(canonical: number, shown: Unit): string {
   const difference = differenceFromCanonical(canonical, shown)
@@ -139,7 +142,7 @@ function listNotes(verdict: ReadingVerdict, units: ReaderUnits): string[] {
   }
   if (measured.uncorrectedValue !== null) {
     notes.push(
-      `The instrument showed ${writeValue(measured.uncorrectedValue, shown)}; with the emissivity of the surface that is ${writeValue(measured.value, shown)}. This takes all radiation together, an approximation good to about 0.2 °C.`,
+      `The instrument showed ${writeValue(measured.uncorrectedValue, shown)}; with the emissivity of the surface that is ${writeValue(measured.value, shown)}. This takes all radiation together, an approximation good to about ${writeTolerance(TOTAL_RADIATION_ERROR_C, shown).slice(1)}.`,
     )
   }
   if (measured.parts.some(({ from, isDefault }) => from === 'accuracy' && isDefault)) {
@@ -156,6 +159,7 @@ export function explainVerdict(verdict: ReadingVerdict, units: ReaderUnits): Exp
   const limit = sayLimit(verdict, units)
   const isLimitFirst = verdict.limit.answer === 'past' || verdict.limit.answer === 'near'
   const [first, second] = isLimitFirst ? [limit, range] : [range, limit]
-  const joint = first.includes(':') || second.includes(':') ? '; ' : ', '
+  const isLong = [first, second].some((part) => /[:]|, with|^no /.test(part))
+  const joint = isLong ? '; ' : ', '
   return { sentence: `${capitalise(first)}${joint}${second}.`, notes: listNotes(verdict, units) }
 }

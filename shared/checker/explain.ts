@@ -67,11 +67,11 @@ export function explainPhysiologyCaution(caution: PhysiologyCaution, units: Read
   const trapped = 'an animal that cannot leave this place'
   switch (caution.kind) {
     case 'near-critical-maximum':
-      return `Danger: with its uncertainty this place may reach ${threshold}, close to or past the critical maximum of ${known}${named}, where ${trapped} loses control of its body. That is borne for minutes, never for hours.`
+      return `Danger: with its uncertainty this place may be at ${threshold} or warmer, close to or past the critical maximum of ${known}${named}, where ${trapped} loses control of its body. That is borne for minutes, never for hours.`
     case 'near-critical-minimum':
-      return `Danger: with its uncertainty this place may be down to ${threshold}, close to or past the critical minimum of ${known}${named}, where ${trapped} can no longer move.`
+      return `Danger: with its uncertainty this place may be at ${threshold} or colder, close to or past the critical minimum of ${known}${named}, where ${trapped} can no longer move.`
     case 'near-freezing':
-      return `Danger: with its uncertainty this place may be at or below ${threshold}, near freezing, for ${trapped}.`
+      return `Danger: with its uncertainty this place may be at ${threshold} or colder, near freezing, for ${trapped}.`
     case 'above-selected-temperature':
       return `With its uncertainty this place may be warmer than the ${threshold} that animals selected in the study with the highest mean${named}. The check shows no way for an animal here to cool down.`
     case 'above-share-of-critical-maximum':

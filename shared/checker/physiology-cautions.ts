@@ -144,6 +144,7 @@ function showsRefuge(
       !BASKING_POSITIONS.includes(place.position) &&
       place.valueC < from.valueC &&
       place.limit !== 'past' &&
+      place.limit !== 'near' &&
       cautionTrapped(place, body, season).length === 0,
   )
 }

@@ -90,14 +90,14 @@ describe('a verdict in words', () => {
 
   it('says what a single bound leaves open', () => {
     expect(explain([makeRange('row', { low: 20 })], 30).sentence).toBe(
-      'Not below 20 °C (over 99.9 % sure), with no upper bound cited, no limit is cited.',
+      'Not below 20 °C (over 99.9 % sure), with no upper bound cited; no limit is cited.',
     )
   })
 
   it('says that no range is cited, and that others are', () => {
     const juvenile = makeRange('row', { lifeStage: 'juvenile', low: 40, high: 46 })
     const { sentence, notes } = explain([juvenile], 43)
-    expect(sentence).toBe('No range is cited for exactly this question, no limit is cited.')
+    expect(sentence).toBe('No range is cited for exactly this question; no limit is cited.')
     expect(notes.join(' ')).toMatch(/another life stage or season/)
   })
 

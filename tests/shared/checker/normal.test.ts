@@ -18,11 +18,11 @@ const TABLE_26_1: [z: number, below: number][] = [
 
 /** Upper tails, worked out to 40 digits with the mpmath library 1.3.0 (ncdf). */
 const TAILS: [z: number, above: number][] = [
-  [5, 2.866515718791939e-7],
-  [8, 6.220960574271784e-16],
-  [10, 7.619853024160526e-24],
-  [20, 2.7536241186062336e-89],
-  [37, 5.7255712225245768e-300],
+  [5, 2.86651571879194e-7],
+  [8, 6.2209605742718e-16],
+  [10, 7.6198530241605e-24],
+  [20, 2.7536241186062e-89],
+  [37, 5.7255712225246e-300],
 ]
 
 /** Quantiles: Abramowitz & Stegun, table 26.5, from memory. */

@@ -159,6 +159,8 @@ describe('a basking place', () => {
     ['with a cooler place at another time', [{ period: 'night', valueC: 20 }]],
     ['with another basking place', [{ position: 'basking-air', valueC: 33 }]],
     ['with a place past its limit', [{ valueC: 25, limit: 'past' }]],
+    ['with a place near its limit', [{ valueC: 25, limit: 'near' }]],
+    ['with a place no cooler', [{ valueC: 50 }]],
   ] as const)('is judged as any other %s', (_, others) => {
     expect(kindsFor([basking, ...others])[0]).toEqual(['near-critical-maximum', 0])
   })
