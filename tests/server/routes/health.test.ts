@@ -1,13 +1,13 @@
+import express from 'express'
 import request from 'supertest'
-import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { afterAll, beforeAll, describe, it } from 'vitest'
 import { createDataSource } from '../../../server/data-source.js'
+import { createLog } from '../../../server/log.js'
+import { errorHandler } from '../../../server/middleware/error-handler.js'
+import { health } from '../../../server/routes/health.js'
+import { createTestDatabase } from '../../helpers/database.js'
 import { startTestApp } from '../../helpers/test-app.js'
 import type { TestApp } from '../../helpers/test-app.js'
-import { createTestDatabase } from '../../helpers/database.js'
-import express from 'express'
-import { health } from '../../../server/routes/health.js'
-import { errorHandler } from '../../../server/middleware/error-handler.js'
-import { createLog } from '../../../server/log.js'
 
 let test: TestApp
 beforeAll(async () => {
