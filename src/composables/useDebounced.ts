@@ -4,7 +4,7 @@ import { onScopeDispose } from 'vue'
 export function useDebounced<A extends unknown[]>(
   act: (...args: A) => void,
   waitMs: number,
-): { call(...args: A): void; flush(): void; cancel(): void } {
+): { call: (...args: A) => void; flush: () => void; cancel: () => void } {
   let timer: ReturnType<typeof setTimeout> | undefined
   let waiting: A | null = null
 

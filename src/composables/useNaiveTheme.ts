@@ -1,5 +1,5 @@
-import { darkTheme, type GlobalTheme, type GlobalThemeOverrides } from 'naive-ui'
-import { computed, onBeforeUnmount, onMounted, ref, type ComputedRef } from 'vue'
+import type { GlobalTheme, GlobalThemeOverrides } from 'naive-ui'
+import { computed, onBeforeUnmount, onMounted, ref, shallowRef, watch, type ComputedRef } from 'vue'
 import { darkOverrides, lightOverrides } from '../assets/naive-theme.js'
 import { usePreferencesStore } from '../stores/preferences.js'
 
@@ -10,24 +10,33 @@ export function useNaiveTheme(): {
 } {
   const preferences = usePreferencesStore()
   const isSystemDark = ref(false)
+  const loadedDarkTheme = shallowRef<GlobalTheme | null>(null)
   let query: MediaQueryList | null = null
 
   function follow(): void {
     isSystemDark.value = query?.matches ?? false
   }
 
+  const isDark = computed(
+    () => preferences.theme === 'dark' || (preferences.theme === 'system' && isSystemDark.value),
+  )
+
   onMounted(() => {
     query = window.matchMedia('(prefers-color-scheme: dark)')
     query.addEventListener('change', follow)
     follow()
+    watch(
+      isDark,
+      async (dark) => {
+        if (dark) loadedDarkTheme.value = (await import('../assets/naive-dark.js')).naiveDarkTheme
+      },
+      { immediate: true },
+    )
   })
   onBeforeUnmount(() => query?.removeEventListener('change', follow))
 
-  const isDark = computed(
-    () => preferences.theme === 'dark' || (preferences.theme === 'system' && isSystemDark.value),
-  )
   return {
-    theme: computed(() => (isDark.value ? darkTheme : null)),
+    theme: computed(() => (isDark.value ? loadedDarkTheme.value : null)),
     overrides: computed(() => (isDark.value ? darkOverrides : lightOverrides)),
   }
 }

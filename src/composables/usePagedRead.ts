@@ -12,7 +12,7 @@ export interface PagedRead<A, I> {
   nextCursor: ComputedRef<string | null>
   isLoadingMore: Ref<boolean>
   moreError: ShallowRef<ApiError | null>
-  loadMore(): Promise<void>
+  loadMore: () => Promise<void>
 }
 
 interface PagedReadOptions<A, I> extends ReadOptions {

@@ -8,7 +8,7 @@ export interface ReadResult<T> {
   state: Ref<ReadState>
   data: ShallowRef<T | null>
   error: ShallowRef<ApiError | null>
-  reload(): Promise<void>
+  reload: () => Promise<void>
 }
 
 export interface ReadOptions {

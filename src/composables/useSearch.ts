@@ -23,11 +23,11 @@ export interface SpeciesSearch {
   words: Ref<string>
   results: PagedRead<SearchAnswer, SpeciesListItem>
   /** Address of this search with some of it changed, from its first page on. */
-  addressWith(change: Partial<SearchQuery>): string
+  addressWith: (change: Partial<SearchQuery>) => string
   /** Goes to that address, as a step that Back undoes. */
-  change(change: Partial<SearchQuery>): Promise<void>
+  change: (change: Partial<SearchQuery>) => Promise<void>
   /** Searches for the typed words at once. */
-  submit(): Promise<void>
+  submit: () => Promise<void>
 }
 
 /** The search whose whole state is the address bar. */

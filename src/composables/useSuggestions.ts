@@ -12,8 +12,8 @@ export interface SuggestionList {
   words: Ref<string>
   suggestions: ShallowRef<Suggestions | null>
   hasFailed: Ref<boolean>
-  suggest(words: string): void
-  clear(): void
+  suggest: (words: string) => void
+  clear: () => void
 }
 
 /** Names that fit what is being typed. An answer to words typed over meanwhile is dropped. */
