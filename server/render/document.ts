@@ -18,6 +18,8 @@ export function assembleDocument(shell: string, page: RenderedPage, links: strin
     .replace(BODY_TAG, (tag) => (page.bodyAttrs === '' ? tag : `<body ${page.bodyAttrs}>`))
     .replace('<!--state-->', () => state)
     .replace('<!--app-->', () => page.html)
-    .replace('<!--head-->', () => [page.headTags, page.css, links].filter(Boolean).join('\n'))
+    // After the shell's own styles, as where the browser loads them: the order decides between equals.
+    .replace('</head>', () => `${links}</head>`)
+    .replace('<!--head-->', () => [page.headTags, page.css].join('\n'))
   return { status: page.status, location: page.location, html, cacheable: page.cacheable }
 }

@@ -26,8 +26,7 @@ describe('assembleDocument', () => {
       cacheable: true,
       html: [
         '<!doctype html><html lang="en" data-theme="dark"><head><title>Title</title>',
-        '<style>a{}</style>',
-        '<link rel="x" /></head><body><div id="app"><main>Page</main></div>' +
+        '<style>a{}</style><link rel="x" /></head><body><div id="app"><main>Page</main></div>' +
           '<script type="application/json" id="page-state">{"a":1}</script></body></html>',
       ].join('\n'),
     })
