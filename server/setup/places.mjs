@@ -114,7 +114,7 @@ export function findHome(checkout, user) {
   const noted = existsSync(note) ? resolve(state, readFileSync(note, 'utf8').trim()) : undefined
   const known = noted ?? homes.find((home) => existsSync(join(home, 'postgres', 'PG_VERSION')))
   if (known) {
-    if (!makePrivateFolder(known, 'postgres', user)) {
+    if (!existsSync(known) || !makePrivateFolder(known, 'postgres', user)) {
       throw new SetupProblem(
         `The database of this checkout is in ${known}, which cannot be used now. Make it reachable for the user who runs the database, or delete ${note} to begin with an empty one.`,
       )

@@ -47,9 +47,11 @@ export async function serve(run, from) {
   run.defer(() => lock.release())
   lock.note('')
 
-  await setUp(run, { build: from === 'built' })
   const serverNote = join(state, 'server.json')
   await endEarlierServer(serverNote)
+  // A busy port is said before the long work; it is asked again after it.
+  await choosePort(asked, USUAL_PORT)
+  await setUp(run, { build: from === 'built' })
   const installation = await openInstallation(run)
   if (!installation.isOurs)
     throw new SetupProblem(
