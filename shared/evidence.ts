@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { unitSchema } from './units.js'
+import { unitSchema } from './unit-schemas.js'
 
 export const evidenceKindSchema = z.enum([
   'guideline',

@@ -1,17 +1,15 @@
-import { z } from 'zod'
-
 /**
  * Units a value may be typed or printed in. Names follow UCUM where it has one (Cel, [degF], %, h, cm, [in_i]),
- * written here as plain words. Canonical units: degC, percentRh, uvi, h, cm.
+ * written here as plain words. Canonical units: degC, percentRh, uvi, h, cm. Their schemas stand in a file of their own,
+ * so that a page which only converts carries no schema library.
  */
-export const unitSchema = z.enum(['degC', 'degF', 'percentRh', 'uvi', 'h', 'cm', 'in'])
-export type Unit = z.infer<typeof unitSchema>
+export const UNITS = ['degC', 'degF', 'percentRh', 'uvi', 'h', 'cm', 'in'] as const
+export type Unit = (typeof UNITS)[number]
 
-export const temperatureUnitSchema = z.enum(['degC', 'degF'])
-export type TemperatureUnit = z.infer<typeof temperatureUnitSchema>
+export const TEMPERATURE_UNITS = ['degC', 'degF'] as const
+export type TemperatureUnit = (typeof TEMPERATURE_UNITS)[number]
 
-export const lengthUnitSchema = z.enum(['cm', 'in'])
-export type LengthUnit = z.infer<typeof lengthUnitSchema>
+export type LengthUnit = 'cm' | 'in'
 
 /** Exact: 5 °C apart is 9 °F apart (NIST SP 811, appendix B). Two whole numbers round less often than the factor 1.8. */
 const DEGF_STEPS = 9

@@ -14,7 +14,7 @@ import {
   seasonSchema,
 } from '../../../shared/ranges.js'
 import type { PageItem } from '../../../shared/revisions.js'
-import { unitSchema } from '../../../shared/units.js'
+import { unitSchema } from '../../../shared/unit-schemas.js'
 import { hashContent } from '../../../server/content-hash.js'
 import { createDataSource } from '../../../server/data-source.js'
 import { findPhysiologyRecords } from '../../../server/queries/physiology.js'
