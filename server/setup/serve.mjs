@@ -13,7 +13,7 @@ import { fillDatabase, openInstallation, productEnvironment, setUp } from './ins
 import { readLockNote, takeLock } from './lock.mjs'
 import { root, stateFolder } from './places.mjs'
 import { choosePort, parsePort } from './ports.mjs'
-import { endProcess, identify, waitUntil } from './processes.mjs'
+import { endProcess, identify, isAlive, waitUntil } from './processes.mjs'
 import { productProgram } from './product.mjs'
 import { say, secondsSince, SetupProblem } from './say.mjs'
 
@@ -81,7 +81,10 @@ export async function serve(run, from) {
 async function endEarlierServer(notePath) {
   if (!existsSync(notePath)) return
   try {
-    await endProcess(JSON.parse(readFileSync(notePath, 'utf8')), ['SIGTERM', 'SIGKILL'], SERVER_POLITE_MS)
+    const identity = JSON.parse(readFileSync(notePath, 'utf8'))
+    // It was told to stop when its starter died, and a second word would cut short the requests it is finishing.
+    await waitUntil(() => !isAlive(identity), SERVER_POLITE_MS)
+    await endProcess(identity, ['SIGKILL'], SERVER_POLITE_MS)
   } catch {
     // Half a note: its writer was killed in the act.
   }
