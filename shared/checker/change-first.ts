@@ -55,16 +55,14 @@ function findTrouble({ parameter, limit, range }: JudgedReading): Trouble | null
   return range.answer === 'low' ? 'too-cool' : null
 }
 
-/** Past an upper limit before everything; then the worse verdict; then too hot before too cool, heat being the quicker harm. */
+/** Of readings that stand alike: past an upper limit first, then too hot before too cool, heat being the quicker harm. */
 const TROUBLE_ORDER: readonly Trouble[] = ['past-upper-limit', 'too-hot', 'too-cool']
 
 function compareTroubles(
   a: { trouble: Trouble; reading: JudgedReading },
   b: { trouble: Trouble; reading: JudgedReading },
 ): number {
-  const isUrgent = (entry: typeof a) => (entry.trouble === 'past-upper-limit' ? 0 : 1)
   return (
-    isUrgent(a) - isUrgent(b) ||
     compareStandings(a.reading.standing, b.reading.standing) ||
     TROUBLE_ORDER.indexOf(a.trouble) - TROUBLE_ORDER.indexOf(b.trouble) ||
     a.reading.readingIndex - b.reading.readingIndex

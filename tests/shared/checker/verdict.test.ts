@@ -148,6 +148,13 @@ describe('a range that the instrument cannot confirm', () => {
     })
   })
 
+  it('is not named beside an inside, which 3.92 in place of 3.919928 would allow by a hair', () => {
+    expect(judge(0, 1, { low: -1.959975, high: 1.959975 })).toMatchObject({
+      answer: 'inside',
+      cannotConfirm: null,
+    })
+  })
+
   it('of no width wants an instrument that does not exist', () => {
     expect(judge(25, 0.1, { low: 25, high: 25 }).cannotConfirm).toEqual({ neededAccuracy: 0 })
   })
