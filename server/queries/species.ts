@@ -21,6 +21,13 @@ const CLASSIFICATION = `(
   from item join classification_row stored on stored.hash = item.row_hash where item.kind = 'classification'
 )`
 
+const EVIDENCE_BY_RANGE = `
+  select item.parent_item_id, json_agg(
+    json_build_object('itemId', item.item_id, 'row', ${ROW_MAPPINGS.evidence.toJson('stored')}) order by item.ordinal
+  ) as list
+  from item join evidence_row stored on stored.hash = item.row_hash
+  where item.kind = 'evidence' group by item.parent_item_id`
+
 const RANGES = `coalesce((
   select json_agg(json_build_object(
     'itemId', item.item_id,
@@ -29,13 +36,7 @@ const RANGES = `coalesce((
   ) order by item.ordinal)
   from item
   join range_row stored on stored.hash = item.row_hash
-  left join (
-    select item.parent_item_id, json_agg(
-      json_build_object('itemId', item.item_id, 'row', ${ROW_MAPPINGS.evidence.toJson('stored')}) order by item.ordinal
-    ) as list
-    from item join evidence_row stored on stored.hash = item.row_hash
-    where item.kind = 'evidence' group by item.parent_item_id
-  ) evidence on evidence.parent_item_id = item.item_id
+  left join evidence on evidence.parent_item_id = item.item_id
   where item.kind = 'range'
 ), '[]')`
 
@@ -71,7 +72,8 @@ const HISTORY = `(
   ) recent
 )`
 
-// One trip, and PostgreSQL writes the JSON: reading the rows into objects and writing them out again took most of the time.
+// One trip, and PostgreSQL writes the JSON. Evidence is gathered once and kept: as a part of the join it was gathered anew for
+// each range.
 const FIND_SPECIES_PAGE = {
   name: 'find-species-page',
   text: `
@@ -83,7 +85,7 @@ const FIND_SPECIES_PAGE = {
       where species_slug.slug = $1
     ), item as materialized (
       select revision_item.* from page join revision_item on revision_item.revision_id = page.revision_id
-    )
+    ), evidence as materialized (${EVIDENCE_BY_RANGE})
     select json_build_object(
       'species', json_build_object('id', page.id, ${toPageRef('page')}),
       'revision', (select ${toRevisionMark('shown')} from revision shown where shown.id = page.revision_id),
