@@ -31,7 +31,7 @@ export interface RenderedPage {
   state: string
   /** `<style>` elements for the head: our tokens, then those of the component library. */
   css: string
-  /** Whether the page depends on nothing but its address, units, theme and the published data. */
+  /** Whether the page is whole: it then depends on nothing but its address, units, theme and the published data. */
   cacheable: boolean
   /** Modules the page used, for preload links by the build's manifest. */
   modules: string[]
@@ -91,7 +91,7 @@ export async function render(url: string, input: RenderInput): Promise<RenderedP
     bodyAttrs,
     state: toSafeJson(state),
     css: tokensStyle + collect(),
-    cacheable: status === 200 && router.currentRoute.value.meta.isCacheable !== false,
+    cacheable: status === 200 && reads.every((read) => !('error' in read)),
     modules: [...(ssrContext.modules ?? [])],
   }
 }
