@@ -10,7 +10,7 @@ export interface ReaderUnits {
   length: LengthUnit
 }
 
-const NO_BREAK_SPACE = ' '
+const NO_BREAK_SPACE = '\u00a0'
 const DECIMALS_MAX = 6
 
 /** The unit a reader is shown a canonical quantity in: `degC` and `cm` follow the reader, the others stay. */
@@ -42,9 +42,9 @@ export function formatNumber(value: number, decimals: number): string {
   return value < 0 && Number(text) !== 0 ? `−${text}` : text
 }
 
-/** A count with thin groups of thousands: 9 630. */
+/** A count in groups of thousands that stay on one line: 9 630. */
 export function formatCount(count: number): string {
-  return String(count).replace(/\B(?=(\d{3})+(?!\d))/g, ' ')
+  return String(count).replace(/\B(?=(\d{3})+(?!\d))/g, NO_BREAK_SPACE)
 }
 
 /** "1 study", "28 studies". */

@@ -18,7 +18,7 @@ import type { RangeRow } from '../../shared/ranges.js'
 
 const celsius = { temperature: 'degC', length: 'cm' } as const
 const fahrenheit = { temperature: 'degF', length: 'in' } as const
-const plain = (text: string | null) => text?.replaceAll(' ', ' ')
+const plain = (text: string | null) => text?.replaceAll('\u00a0', ' ')
 
 function row(over: Partial<RangeRow>): RangeRow {
   return {
@@ -47,7 +47,7 @@ describe('numbers', () => {
   })
 
   test('thousands are grouped', () => {
-    expect(plain(formatCount(9630))?.replace(' ', ' ')).toBe('9 630')
+    expect(plain(formatCount(9630))).toBe('9 630')
     expect(formatCount(630)).toBe('630')
   })
 
@@ -67,6 +67,11 @@ describe('numbers', () => {
     expect(plain(formatExact(41.8, 'degC'))).toBe('41.8 °C')
     expect(plain(formatExact(40, 'degF'))).toBe('104.0 °F')
   })
+})
+
+test('a number never parts from its unit at the end of a line', () => {
+  expect(formatValue(40, 'degC')).toBe('40\u00a0°C')
+  expect(writeBoundsWithUnit(formatBounds(40, 46, 'degC'))).not.toContain(' ')
 })
 
 describe('ranges', () => {

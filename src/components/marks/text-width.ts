@@ -5,7 +5,7 @@ const DIGITS = /^[0-9–−+°/-]$/
 const CAPITAL = /^\p{Lu}$/u
 
 function characterWidth(character: string): number {
-  if (character === ' ' || character === ' ') return 0.27
+  if (character === ' ' || character === '\u00a0') return 0.27
   if (NARROW.has(character)) return 0.3
   if (WIDE.has(character)) return 0.9
   if (DIGITS.test(character)) return 0.58

@@ -93,7 +93,7 @@ function answerAt(
 
 /**
  * What the page answers to the choice, by parameter and place. Which row applies is decided by the checker's selection
- * alone. A parameter without any row on the page is left out, but for the UV index of an animal that basks.
+ * alone. A parameter with nothing to say is left out.
  */
 export function listAnswers(ranges: readonly CitedRange[], choice: PageChoice): ParameterRows[] {
   const answers: ParameterRows[] = []
@@ -113,7 +113,7 @@ export function listAnswers(ranges: readonly CitedRange[], choice: PageChoice): 
       }
     }
     const gaps = findGaps(ranges, parameter)
-    if (ofParameter.length > 0 || gaps.length > 0) answers.push({ parameter, rows, unanswered, gaps })
+    if (rows.length + unanswered.length + gaps.length > 0) answers.push({ parameter, rows, unanswered, gaps })
   }
   return answers
 }
