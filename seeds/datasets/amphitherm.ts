@@ -28,7 +28,6 @@ export const amphitherm: DatasetDefinition = {
   ownSource: null,
   parameters: ['ctmax', 'ctmin', 'tpref', 'lt50_hot', 'lt50_cold'],
   units: ['degC'],
-  leavesOut: null,
   readRow: (row) => {
     const key = parseNote(row.note).facts.get('ref_key')
     const isForeign = key !== undefined && foreignDois[key] === row.source_doi

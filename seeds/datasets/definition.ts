@@ -41,7 +41,5 @@ export interface DatasetDefinition extends DatasetBrief {
   ownSource: OwnSource | null
   parameters: readonly string[]
   units: readonly string[]
-  /** What is not taken over, and why; shown on the attributions page's documentation and printed by the importer. */
-  leavesOut: string | null
   readRow(row: RecordRow): RowReading
 }

@@ -62,7 +62,6 @@ export const eu2007: DatasetDefinition = {
   },
   parameters: Object.keys(meanings),
   units: ['degC', '%RH'],
-  leavesOut: 'Rows that were written down from memory and not read in the text.',
   readRow: (row) => {
     const note = parseNote(row.note)
     return note.facts.get('how_obtained') === 'read today'

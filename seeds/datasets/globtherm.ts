@@ -21,7 +21,6 @@ export const globtherm: DatasetDefinition = {
   ownSource: null,
   parameters: ['ctmax', 'ctmin', 'lt50_hot', 'lt50_cold', 'lt100_hot', 'lt100_cold', 'supercooling_point'],
   units: ['degC'],
-  leavesOut: null,
   readRow: (row) => {
     const { facts, remarks } = parseNote(row.note)
     const acclimation = facts.get(acclimationKey)

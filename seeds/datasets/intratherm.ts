@@ -17,6 +17,5 @@ export const intratherm: DatasetDefinition = {
   ownSource: null,
   parameters: ['ctmax', 'ctmin'],
   units: ['degC'],
-  leavesOut: null,
   readRow: (row) => readRecord(row, 'study', { form: 'key', asPrinted: row.source_citation }),
 }

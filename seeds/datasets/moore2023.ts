@@ -17,6 +17,5 @@ export const moore2023: DatasetDefinition = {
   ownSource: null,
   parameters: ['tpref', 'tb_field'],
   units: ['degC'],
-  leavesOut: null,
   readRow: (row) => readRecord(row, 'study', { form: 'key', asPrinted: row.source_citation }),
 }

@@ -50,7 +50,7 @@ const factWords: Record<string, string> = {
 }
 
 /** Keys that say again what the record itself says. */
-const spokenFor = new Set(['level', 'sd', 'se', 'metric', 'ref_key', 'how_obtained'])
+const spokenFor = new Set(['level', 'sd', 'se', 'metric', 'ref_key'])
 
 /** The remaining facts of a note, for a record to carry. */
 export function toFacts({ facts, remarks }: Note): Record<string, string> {

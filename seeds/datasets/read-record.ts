@@ -13,7 +13,6 @@ interface Meaning {
 const meanings: Record<string, Meaning> = {
   tb_field: { quantity: 'field-body-temperature', lethalPercent: null },
   tpref: { quantity: 'selected-body-temperature', lethalPercent: null },
-  topt: { quantity: 'optimum-temperature', lethalPercent: null },
   ctmin: { quantity: 'critical-thermal-minimum', lethalPercent: null },
   ctmax: { quantity: 'critical-thermal-maximum', lethalPercent: null },
   lt0_cold: { quantity: 'lethal-minimum', lethalPercent: 0 },
@@ -24,9 +23,6 @@ const meanings: Record<string, Meaning> = {
   lt100_hot: { quantity: 'lethal-maximum', lethalPercent: 100 },
   supercooling_point: { quantity: 'supercooling-point', lethalPercent: null },
 }
-
-/** Every parameter a file of records may hold. */
-export const recordParameters: readonly string[] = Object.keys(meanings)
 
 /** Reads a row as one record of the animal's body, or says why it cannot be used. */
 export function readRecord(

@@ -34,6 +34,5 @@ export const repttraits: DatasetDefinition = {
   },
   parameters: ['tb_field'],
   units: ['degC'],
-  leavesOut: null,
   readRow: (row) => readRecord(row, 'summary', { form: 'own', asPrinted: row.source_citation }),
 }

@@ -32,8 +32,6 @@ export const squambase: DatasetDefinition = {
   },
   parameters: ['tb_field', 'tpref'],
   units: ['degC'],
-  leavesOut:
-    'Values that a script read out of the free text of the source column: a value beside a citation need not be that citation’s.',
   readRow: (row) =>
     parseNote(row.note).facts.get('level') === 'species_summary'
       ? readRecord(row, 'summary', { form: 'own', asPrinted: row.source_citation })

@@ -14,6 +14,9 @@ import { beginPage, bringUpToDate, toKeyText, type DatasetContent } from './page
 import { readDatasetFile, type AcceptedRow, type DatasetFile } from './read-dataset.js'
 import { resolveCitations, type ResolvedCitations } from './resolve-citations.js'
 
+/** The key under which imports wait for each other. */
+const IMPORT_LOCK = 7_301_002
+
 /** Pages whose content is read, compared and published in one go. */
 const PAGES_PER_BATCH = 200
 
@@ -132,8 +135,9 @@ async function writeDataset(
   taxonomy: Taxonomy,
   { importedAt, say = () => undefined }: ImportOptions,
 ): Promise<ImportReport> {
-  // Two imports of one dataset wait for each other; the second then finds the first one's work done.
-  await db.query(`select pg_advisory_xact_lock(hashtext($1))`, [`import ${definition.id}`])
+  // Imports wait for each other: of one dataset, the second then finds the first one's work done; of two, both may want to
+  // begin the same page.
+  await db.query('select pg_advisory_xact_lock($1)', [IMPORT_LOCK])
   const { pages } = file
   const rows = pages.flatMap((page) => page.rows)
   const { isKnown, version } = await findVersion(db, definition, file.sha256)

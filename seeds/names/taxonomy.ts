@@ -153,7 +153,7 @@ function combineRows(pageName: string, own: TaxonRow | undefined, rows: TaxonRow
       provenance: clip(
         [
           (own ?? rows[0])?.taxonomy_source ?? '',
-          candidates.length > 0 ? `accepted names listed for it: ${candidates.join(', ')}` : '',
+          candidates.length > 0 ? `the lists offer for it: ${candidates.join(', ')}` : '',
         ]
           .filter((part) => part !== '')
           .join('; '),

@@ -44,7 +44,7 @@ describe('what a page says of its taxon', () => {
     expect(statusOf('Bufo boreas')).toBe('needs-a-person')
   })
 
-  it('names the accepted names between which a person has to choose', () => {
+  it('names what the lists offer, between which a person has to choose', () => {
     expect(describePage('Bufo boreas').names[0]?.provenance).toContain('Anaxyrus boreas, Anaxyrus nelsoni')
   })
 
