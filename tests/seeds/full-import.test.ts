@@ -13,7 +13,7 @@ let database: TestDatabase
 let dataSource: DataSource
 let reports: ImportReport[]
 
-// The one whole import of the suite: half a minute on a quiet machine, much longer on a busy one.
+// The one whole import of the suite: 45 s where it was measured, longer on a busy machine.
 beforeAll(async () => {
   database = await createTestDatabase()
   dataSource = await createDataSource(database.url).initialize()
