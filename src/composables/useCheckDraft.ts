@@ -17,7 +17,11 @@ function isTexts(value: unknown): value is CheckTexts {
   if (typeof value !== 'object' || value === null || !('rows' in value) || !('room' in value)) return false
   const { rows, room } = value
   const isRoom =
-    typeof room === 'object' && room !== null && 'text' in room && typeof room.text === 'string' && 'unit' in room
+    typeof room === 'object' &&
+    room !== null &&
+    'text' in room &&
+    typeof room.text === 'string' &&
+    'unit' in room
   return isRoom && Array.isArray(rows) && rows.every(isRowTexts)
 }
 
@@ -28,7 +32,9 @@ function isRowTexts(row: unknown): boolean {
   return Object.entries(form).every(([key, field]) => {
     if (key === 'values') return Array.isArray(field) && field.every((text) => typeof text === 'string')
     if (key === 'surface') {
-      return field === null || Object.values(Object(field) as object).every((text) => typeof text === 'string')
+      return (
+        field === null || Object.values(Object(field) as object).every((text) => typeof text === 'string')
+      )
     }
     return typeof field === 'string'
   })
@@ -38,8 +44,10 @@ function isRowTexts(row: unknown): boolean {
 export function readDraft(storage: Pick<Storage, 'getItem'>, slug: string): Draft | null {
   try {
     const kept: unknown = JSON.parse(storage.getItem(KEY + slug) ?? 'null')
-    if (typeof kept !== 'object' || kept === null || !('version' in kept) || kept.version !== VERSION) return null
-    if (!('links' in kept) || !('texts' in kept) || !isTexts(kept.texts) || !Array.isArray(kept.links)) return null
+    if (typeof kept !== 'object' || kept === null || !('version' in kept) || kept.version !== VERSION)
+      return null
+    if (!('links' in kept) || !('texts' in kept) || !isTexts(kept.texts) || !Array.isArray(kept.links))
+      return null
     return { version: VERSION, links: kept.links.map(String), texts: kept.texts }
   } catch {
     return null
@@ -65,6 +73,10 @@ export function keepDraft(
   }
 }
 
+function isSame(a: CheckTexts, b: CheckTexts): boolean {
+  return JSON.stringify(a) === JSON.stringify(b)
+}
+
 /**
  * Brings back what was typed on this device, the unfinished included, and keeps it while it is typed. A link to another
  * check is shown as it is; what was typed before waits behind `waiting`.
@@ -72,20 +84,21 @@ export function keepDraft(
 export function useCheckDraft(
   slug: () => string,
   checker: Checker,
-  links: () => string[],
-): { waiting: Ref<(() => void) | null>; isReady: Ref<boolean> } {
+  links: () => { address: string | null; own: string | null },
+): { waiting: Ref<(() => void) | null> } {
   const waiting = ref<(() => void) | null>(null)
-  const isReady = ref(false)
   const keep = useDebounced(() => {
-    keepDraft(localStorage, slug(), checker.takeTexts(), links())
+    const { address, own } = links()
+    const named = [address, own].filter((link) => link !== null)
+    keepDraft(localStorage, slug(), checker.takeTexts(), named)
   }, WAIT_MS)
 
   function restore(): void {
     const draft = readDraft(localStorage, slug())
-    if (draft === null || checker.takeTexts() === draft.texts) return
-    const [current] = links()
-    if (current === undefined || draft.links.includes(current)) checker.putTexts(draft.texts)
-    else if (JSON.stringify(draft.texts.rows) !== JSON.stringify(checker.takeTexts().rows)) {
+    if (draft === null || isSame(draft.texts, checker.takeTexts())) return
+    const { address } = links()
+    if (address === null || draft.links.includes(address)) checker.putTexts(draft.texts)
+    else {
       waiting.value = () => {
         checker.putTexts(draft.texts)
         waiting.value = null
@@ -95,20 +108,16 @@ export function useCheckDraft(
 
   onMounted(() => {
     restore()
+    // Opening somebody's link is no typing: the draft behind it stays until there is some.
     watch(
-      [checker.rows, checker.room],
-      () => {
-        // Opening somebody's link is no typing; the draft behind it stays until there is some.
-        if (waiting.value === null || checker.rows.value.some((row) => row.isTouched)) keep.call()
-      },
-      { deep: true },
+      () => JSON.stringify(checker.takeTexts()),
+      () => keep.call(),
     )
     window.addEventListener('pagehide', keep.flush)
-    isReady.value = true
   })
   onBeforeUnmount(() => {
     window.removeEventListener('pagehide', keep.flush)
     keep.flush()
   })
-  return { waiting, isReady }
+  return { waiting }
 }

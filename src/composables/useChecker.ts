@@ -1,5 +1,11 @@
 import { computed, ref, watch, type ComputedRef, type Ref } from 'vue'
-import { READINGS_MAX, type CheckInput, type CheckResult, type Question, type ReadingVerdict } from '../../shared/checker/check.js'
+import {
+  READINGS_MAX,
+  type CheckInput,
+  type CheckResult,
+  type Question,
+  type ReadingVerdict,
+} from '../../shared/checker/check.js'
 import { checkReadings } from '../../shared/checker/check-readings.js'
 import { parseNumber } from '../../shared/checker/parse-number.js'
 import { parseReading, type FieldError, type ParsedReading } from '../../shared/checker/parse-reading.js'
@@ -17,7 +23,7 @@ import {
   toRow,
   type AskedFor,
   type FormRow,
-} from '../components/checker/form-rows.js'
+} from './check-rows.js'
 
 /** A temperature of the room as typed. */
 export interface RoomText {
@@ -63,6 +69,8 @@ export interface Checker {
   errors: ComputedRef<RowError[]>
   /** Adds a place, or a second gauge beside a row, and gives the id of the new row. */
   add(beside?: FormRow): string
+  /** Puts a changed row in the place of the one with its id. */
+  put(row: FormRow): void
   remove(id: string): void
   /** Empties the form; `undoClear` brings everything back once. */
   clear(): void
@@ -156,13 +164,13 @@ export function useChecker(start: {
   const verdicts = computed(() => new Map(judged.value.map((entry) => [entry.row.id, entry])))
 
   const errors = computed<RowError[]>(() => {
-    const found = filled.value.flatMap((row) => {
+    const found = filled.value.flatMap((row): RowError[] => {
       const answer = parsed.value.get(row.id)
       if (!row.isTouched || answer === undefined || answer.ok) return []
       return answer.errors.map((error) => ({ ...error, rowId: row.id }))
     })
     const { error } = parsedRoom.value
-    if (error !== null && isRoomTouched.value) found.push({ rowId: null as never, path: 'room', message: error })
+    if (error !== null && isRoomTouched.value) found.push({ rowId: null, path: 'room', message: error })
     return found
   })
 
@@ -216,6 +224,9 @@ export function useChecker(start: {
       const row = toRow(form, makeId(), false)
       rows.value.push(row)
       return row.id
+    },
+    put(row) {
+      rows.value = rows.value.map((other) => (other.id === row.id ? row : other))
     },
     remove(id) {
       rows.value = rows.value.filter((row) => row.id !== id)

@@ -15,7 +15,11 @@ export const routes: RouteRecordRaw[] = [
     name: 'species-revision',
     component: () => import('../views/SpeciesView.vue'),
   },
-  { path: '/species/:slug/check', name: 'species-check', component: () => import('../views/CheckView.vue') },
+  {
+    path: '/species/:slug/check',
+    name: 'species-check',
+    component: () => import('../views/SpeciesCheckView.vue'),
+  },
   { path: '/check', name: 'check', component: () => import('../views/CheckView.vue') },
   { path: '/sources', name: 'sources', component: () => import('../views/SourcesView.vue') },
   { path: '/sources/:id', name: 'source', component: () => import('../views/SourceView.vue') },
