@@ -1,6 +1,7 @@
 import { DataSource } from 'typeorm'
 import { ClassificationRow } from './entities/ClassificationRow.js'
 import { CurrentCitation } from './entities/CurrentCitation.js'
+import { CurrentPage } from './entities/CurrentPage.js'
 import { CurrentRange } from './entities/CurrentRange.js'
 import { Dataset } from './entities/Dataset.js'
 import { DatasetVersion } from './entities/DatasetVersion.js'
@@ -24,6 +25,7 @@ import { SpeciesSlug } from './entities/SpeciesSlug.js'
 import { GroundFloor1764600000000 } from './migrations/1764600000000-ground-floor.js'
 import { RateLimit1764600000001 } from './migrations/1764600000001-rate-limit.js'
 import { NameSearch1764600000002 } from './migrations/1764600000002-name-search.js'
+import { CurrentPage1764600000003 } from './migrations/1764600000003-current-page.js'
 import { PostgresNaming } from './postgres-naming.js'
 
 /** A data source for a PostgreSQL address, not yet connected; call `initialize()`, and `destroy()` when done. */
@@ -41,6 +43,7 @@ export function createDataSource(url: string, options: { poolSize?: number } = {
     entities: [
       ClassificationRow,
       CurrentCitation,
+      CurrentPage,
       CurrentRange,
       Dataset,
       DatasetVersion,
@@ -62,7 +65,12 @@ export function createDataSource(url: string, options: { poolSize?: number } = {
       SpeciesName,
       SpeciesSlug,
     ],
-    migrations: [GroundFloor1764600000000, RateLimit1764600000001, NameSearch1764600000002],
+    migrations: [
+      GroundFloor1764600000000,
+      RateLimit1764600000001,
+      NameSearch1764600000002,
+      CurrentPage1764600000003,
+    ],
     migrationsTableName: 'migration',
   })
 }

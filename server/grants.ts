@@ -20,7 +20,7 @@ const APPEND_ONLY = [
   'species_slug',
 ]
 const CHANGING = ['species', 'source', 'dataset', 'dataset_version', 'page_request']
-const PROJECTIONS = ['species_name', 'current_range', 'current_citation']
+const PROJECTIONS = ['species_name', 'current_page', 'current_range', 'current_citation']
 
 /** Gives the application role its rights, newly after each migration. Does nothing where that role does not exist. */
 export async function grantApplicationRole(db: EntityManager): Promise<void> {

@@ -18,7 +18,7 @@ export class RecordSet {
   datasetVersionId!: string
   @Column('int') recordCount!: number
   /** The records as study lines, computed once. */
-  @Column('jsonb') studies!: StudyLine[]
+  @Column('json') studies!: StudyLine[]
   @Column('text', { array: true }) quantities!: string[]
   @Column('uuid', { array: true }) sourceIds!: string[]
 }

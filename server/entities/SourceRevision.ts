@@ -12,7 +12,7 @@ export class SourceRevision {
   @ForeignKey(() => Source)
   sourceId!: string
   @Column('int') number!: number
-  @Column('jsonb') csl!: CslItem
+  @Column('json') csl!: CslItem
   @Column('timestamptz') publishedAt!: Date
   /** `dataset` or `demonstration`. */
   @Column('text') broughtBy!: string

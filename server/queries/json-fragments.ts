@@ -36,21 +36,15 @@ export function toPageRef(species: string): string {
 }
 
 /**
- * An SQL expression: the sources whose ids a query gives, as one object by id. A merged source is its heir, under its own id and
- * under the heir's, so that a row may be looked up by what it cites and studies be counted by what they are.
+ * An SQL expression: the sources of an array of ids, as one object by the id that is cited. A merged source is its heir, so that
+ * a row is looked up by what it cites and studies are counted by what they are.
  */
-export function toSourcesById(idsQuery: string): string {
+export function toSourcesById(ids: string): string {
   return `coalesce((
-    with cited as (${idsQuery}),
-    named as (
-      select id from cited
-      union
-      select source.merged_into_id from cited join source using (id) where source.merged_into_id is not null
-    )
-    select json_object_agg(named.id, ${toSourceBrief('heir', 'heir_revision')})
-    from named
-    join source on source.id = named.id
+    select json_object_agg(source.id, ${toSourceBrief('heir', 'heir_revision')})
+    from source
     join source heir on heir.id = coalesce(source.merged_into_id, source.id)
     join source_revision heir_revision on heir_revision.id = heir.current_source_revision_id
+    where source.id = any(${ids})
   ), '{}')`
 }

@@ -50,7 +50,7 @@ const FIND_RECORDS = {
         select json_agg(json_build_object('ordinal', ordinal, 'record', ${RECORD_MAPPING.toJson('shown')}) order by ordinal)
         from shown
       ), '[]') as found,
-      ${toSourcesById('select distinct source_id as id from shown where source_id is not null')} as sources
+      ${toSourcesById('array(select distinct source_id from shown where source_id is not null)')} as sources
     from named`,
 }
 

@@ -4,6 +4,7 @@ import {
   STAGES_ANY_NEVER_COVERS,
   WHOLE_ENCLOSURE_SERVES,
 } from '../../../shared/checker/selection.js'
+import { toPageJson } from '../../entities/page-json.js'
 import { queryPrepared, type Prepared } from '../../prepared.js'
 import { requireTransaction } from '../../transactions.js'
 
@@ -34,7 +35,8 @@ function projectionStatements(scope: 'page' | 'all'): Prepared[] {
 
   const clear = `
     with names as (delete from species_name where ${where('species_id')}),
-      citations as (delete from current_citation where ${where('species_id')})
+      citations as (delete from current_citation where ${where('species_id')}),
+      contents as (delete from current_page where ${where('species_id')})
     delete from current_range where ${where('species_id')}`
 
   const names = `
@@ -134,6 +136,12 @@ function projectionStatements(scope: 'page' | 'all'): Prepared[] {
       left join evidenced using (species_id)
     where species.id = named.species_id`
 
+  const pageJson = Object.entries(toPageJson('species.current_revision_id'))
+  const content = `
+    insert into current_page (species_id, revision_id, ${pageJson.map(([column]) => column).join(', ')})
+    select species.id, species.current_revision_id, ${pageJson.map(([, json]) => json).join(', ')}
+    from species where ${where('species.id')} and species.current_revision_id is not null`
+
   const citations = `
     insert into current_citation (source_id, species_id, scientific_name, ranges, physiology)
     select source_id, species.id, species.scientific_name, sum(ranges)::int, sum(physiology)::int from (
@@ -145,7 +153,7 @@ function projectionStatements(scope: 'page' | 'all'): Prepared[] {
       select species.id, (line ->> 'sourceId')::uuid, 0, (line ->> 'records')::int
       from ${current('physiology', 'physiology_row')}
       join record_set on record_set.hash = stored.record_set_hash
-      cross join jsonb_array_elements(record_set.studies) line
+      cross join json_array_elements(record_set.studies) line
       where line ->> 'sourceId' is not null
       union all
       select species.id, cited.source_id, 0, 0 from ${current('prose', 'prose_row')}
@@ -153,7 +161,7 @@ function projectionStatements(scope: 'page' | 'all'): Prepared[] {
     ) cited join species on species.id = cited.species_id
     group by source_id, species.id, species.scientific_name`
 
-  return Object.entries({ clear, names, ranges, page, citations }).map(([name, text]) => ({
+  return Object.entries({ clear, names, ranges, page, content, citations }).map(([name, text]) => ({
     name: `project-${scope}-${name}`,
     text,
   }))

@@ -215,7 +215,7 @@ async function insertRevision(
 
 /**
  * Publishes the whole content of a page as its next revision: the only function that changes what is published. Writes the rows
- * that are new, the revision with its items, the page's pointer and projections, and moves the site's epoch; at most eleven
+ * that are new, the revision with its items, the page's pointer and projections, and moves the site's epoch; at most twelve
  * statements, however long the page or its history. It needs the caller's transaction, so that it happens whole or not at all.
  *
  * Throws InvalidInput for content that contradicts itself or names what does not exist, NotFound for an unknown page, Conflict

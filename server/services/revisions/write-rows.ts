@@ -64,7 +64,7 @@ const INSERT_RECORD_SETS = {
         (select id from dataset_version where dataset_id = set.dataset_id order by imported_at desc, id limit 1),
         record_count, studies, quantities, source_ids
       from jsonb_to_recordset($1::jsonb) as set (
-        hash bytea, dataset_id text, record_count int, studies jsonb, quantities text[], source_ids uuid[]
+        hash bytea, dataset_id text, record_count int, studies json, quantities text[], source_ids uuid[]
       )
       order by hash
       on conflict do nothing

@@ -53,7 +53,7 @@ const INSERT_SOURCES = `
   with given as (
     select * from jsonb_to_recordset($1::jsonb) as given (
       id uuid, kind text, terms text, as_printed text, is_invented boolean, listing text,
-      csl jsonb, revision_id uuid, published_at timestamptz, brought_by text, dataset_version_id uuid
+      csl json, revision_id uuid, published_at timestamptz, brought_by text, dataset_version_id uuid
     )
   ), new_source as (
     insert into source (id, kind, terms, as_printed, is_invented, current_source_revision_id, listing)

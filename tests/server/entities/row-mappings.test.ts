@@ -160,7 +160,11 @@ const recordArbitrary = fc.record({
   n: orNull(count),
   level: fc.constantFrom('study' as const, 'summary' as const),
   sourceAsPrinted: text(0, 200),
-  facts: fc.dictionary(text(1, 20), text(0, 20)),
+  // The schema drops this one key, so that a list that has it is refused: its hash is not that of what would be stored.
+  facts: fc.dictionary(
+    text(1, 20).filter((key) => key !== '__proto__'),
+    text(0, 20),
+  ),
 })
 
 function findAll(page: NonNullable<Awaited<ReturnType<typeof findSpeciesPage>>>) {

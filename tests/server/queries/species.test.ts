@@ -115,6 +115,25 @@ describe('a species page', () => {
     expect(page?.currentRevisionNumber).toBe(7)
   })
 
+  test('reads the same from its rows as from what was written when it was published', async () => {
+    const sourceId = await addSource(dataSource)
+    const range = makeRangeItem()
+    const { item, recordSet } = makeDatasetItem('test-set', [makeRecord({ sourceId })])
+    const items = [
+      makeNameItem(),
+      range,
+      makeEvidenceItem(range.itemId, sourceId),
+      item,
+      makeProseItem('Text.'),
+    ]
+    const { slug, speciesId } = await publish(dataSource, items, { recordSets: [recordSet] })
+    const written = await findSpeciesPage(dataSource.manager, slug, null)
+    expect(await findSpeciesPage(dataSource.manager, slug, 1)).toEqual(written)
+    await dataSource.query('delete from current_page where species_id = $1', [speciesId])
+    expect(await findSpeciesPage(dataSource.manager, slug, null)).toEqual(written)
+    expect(written?.ranges[0]?.evidence).toHaveLength(1)
+  })
+
   test('that does not exist is null, as is a revision that does not exist', async () => {
     const { slug } = await publish(dataSource, [makeNameItem()])
     expect(await findSpeciesPage(dataSource.manager, 'no-such-page', null)).toBeNull()
@@ -160,7 +179,7 @@ describe('the sources of a page', () => {
     expect(Object.keys(page?.sources ?? {})).not.toContain(ofNone)
   })
 
-  test('that were merged are their heir, under the cited id and under its own', async () => {
+  test('that were merged are their heir, under the id that is cited', async () => {
     const cited = await addSource(dataSource, { csl: { type: 'book', title: 'Typed twice' } })
     const heir = await addSource(dataSource, { csl: { type: 'book', title: 'Typed well' } })
     const range = makeRangeItem()
@@ -168,8 +187,7 @@ describe('the sources of a page', () => {
     await dataSource.transaction((db) => mergeSources(db, [{ fromId: cited, intoId: heir }]))
     const page = await findSpeciesPage(dataSource.manager, slug, null)
     expect(page?.ranges[0]?.evidence[0]?.row.sourceId).toBe(cited)
-    expect(Object.keys(page?.sources ?? {}).sort()).toEqual([cited, heir].sort())
+    expect(Object.keys(page?.sources ?? {})).toEqual([cited])
     expect(page?.sources[cited]).toMatchObject({ id: heir, csl: { title: 'Typed well' } })
-    expect(page?.sources[heir]).toEqual(page?.sources[cited])
   })
 })

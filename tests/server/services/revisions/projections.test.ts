@@ -46,7 +46,14 @@ afterAll(async () => {
 })
 
 async function readProjections(): Promise<Record<string, unknown[]>> {
-  const tables = ['species', 'species_slug', 'species_name', 'current_range', 'current_citation']
+  const tables = [
+    'species',
+    'species_slug',
+    'species_name',
+    'current_page',
+    'current_range',
+    'current_citation',
+  ]
   const rows = await Promise.all(
     tables.map((table) => dataSource.query(`select * from ${table} row order by row::text`)),
   )
@@ -160,7 +167,9 @@ describe('the projections of a page', () => {
     const published = await readProjections()
 
     const owner = await createDataSource(database.ownerUrl).initialize()
-    await owner.query('delete from species_name; delete from current_range; delete from current_citation')
+    await owner.query(
+      'delete from species_name; delete from current_page; delete from current_range; delete from current_citation',
+    )
     await owner.query(`update species set scientific_name = 'x', common_names = '{}', class = '', range_count = 9,
       evidence_kinds = '{}', search = '', uv_zone = 1, physiology_count = 0`)
     await owner.destroy()
