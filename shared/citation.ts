@@ -9,6 +9,7 @@ export interface ReferenceParts {
   /** "Huey, R. B. & Pianka, E. R. (1977)", or null when neither author nor year is known. */
   lead: string | null
   title: string | null
+  /** The journal or book it stands in, or who published it. */
   container: string | null
   /** Volume and pages: "58: 1066–1075". */
   detail: string | null
@@ -95,7 +96,7 @@ export function toReferenceParts(source: Pick<SourceBrief, 'csl' | 'asPrinted' |
     ...empty,
     lead: lead === '' ? null : lead,
     title: csl.title,
-    container: csl['container-title'] ?? null,
+    container: csl['container-title'] ?? (typeof csl.publisher === 'string' ? csl.publisher : null),
     detail: detail === '' ? null : detail,
   }
 }

@@ -161,8 +161,8 @@ export function writeBoundsWithUnit(bounds: ShownBounds): string {
 /** "40 to 46 °C": the same for a sentence read aloud. */
 export function speakBounds(bounds: ShownBounds): string {
   const { low, high, unit } = bounds
-  if (low !== null && high !== null && low !== high) return `${low} to ${high} ${unit}`
-  return writeBoundsWithUnit(bounds).replaceAll(NO_BREAK_SPACE, ' ')
+  if (low !== null && high !== null && low !== high) return `${low} to ${high}${NO_BREAK_SPACE}${unit}`
+  return writeBoundsWithUnit(bounds)
 }
 
 /** A date in words in the given locale, the day as it is in UTC: "3 October 2026". */

@@ -73,6 +73,15 @@ describe('the full form', () => {
     expect(toReferenceParts(withDoi).url).toBe('https://doi.org/10.2307/1936926')
   })
 
+  test('names the publisher of what stands in no journal', () => {
+    const report = {
+      doi: null,
+      asPrinted: null,
+      csl: { type: 'report', title: 'Housing standards', publisher: 'A board' },
+    }
+    expect(toFullReference(report)).toBe('Housing standards. A board.')
+  })
+
   test('is the printed words where the fields say nothing', () => {
     expect(toFullReference(printed)).toBe('Berkhouse & Fries 1995.')
     expect(toReferenceParts(printed)).toMatchObject({ title: null, asPrinted: 'Berkhouse & Fries 1995' })

@@ -10,7 +10,7 @@ export interface Axis {
 
 /** Shares of the line are written as percentages of a drawing, with as many digits as a wide screen has pixels. */
 const SHARE_DIGITS = 2
-const TICKS_WANTED = 5
+const TICKS_WANTED = 6
 /** Space left beside the outermost number, as a share of the span of all numbers. */
 const MARGIN = 0.08
 /** The least span worth drawing, so that a single value does not become a line of its last digit. */

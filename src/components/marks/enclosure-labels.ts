@@ -16,6 +16,8 @@ export const MARK_WIDTH = 22
 const LID_Y = 42
 /** Air between the lowest label row and the floor, so that every point of the air stays below the labels. */
 const AIR_HEIGHT = 158
+/** The same where no point lies in the air. */
+const LOW_AIR_HEIGHT = 116
 const LABELS_TOP = LID_Y + 12
 const BELOW_GAP = 26
 /** Circles with a number must not touch; the distance of two centres. */
@@ -62,7 +64,10 @@ export function layOutEnclosure(plan: EnclosurePlan, targets: readonly Enclosure
     ...labelSize(target),
   }))
   const layout = layOutLabels(wishes, PLAN_LEFT + 12, PLAN_RIGHT - 12)
-  const floorY = LABELS_TOP + layout.heightAbove + AIR_HEIGHT
+  const hasPointInAir = targets.some(
+    ({ position }) => position !== 'whole-enclosure' && labelSide(position) === 'above',
+  )
+  const floorY = LABELS_TOP + layout.heightAbove + (hasPointInAir ? AIR_HEIGHT : LOW_AIR_HEIGHT)
   const bottom = floorY + groundDepth(plan)
   const belowTop = bottom + BELOW_GAP
   const labels = targets.flatMap((target): EnclosureLabel[] => {

@@ -24,6 +24,8 @@ export interface EnclosurePlan {
   ground: 'thin' | 'deep' | 'bank' | 'none'
   water: 'none' | 'dish' | 'pool' | 'tank'
   hasBurrow: boolean
+  /** Where a pool begins; null without one. */
+  poolX: number | null
   floor: { thing: FloorThing; x: number }[]
   /** Things on the floor are drawn smaller where they stand close. */
   floorScale: number
@@ -40,6 +42,7 @@ export interface EnclosureFacts {
 }
 
 const PERCH_X = 168
+const POOL_STEP = 76
 const FLOOR_ORDER: readonly { thing: FloorThing; position: Position }[] = [
   { thing: 'warm-hide', position: 'warm-hide' },
   { thing: 'humid-hide', position: 'humid-hide' },
@@ -70,8 +73,10 @@ export function chooseAnimal(classification: EnclosureFacts['classification']): 
   return null
 }
 
-function chooseWater(positions: ReadonlySet<Position>, hasBasking: boolean): EnclosurePlan['water'] {
+function chooseWater(facts: EnclosureFacts, hasBasking: boolean): EnclosurePlan['water'] {
+  const { positions, classification } = facts
   if (!positions.has('water')) return 'none'
+  if (hasBasking && /aquatic/i.test(classification?.microhabitat ?? '')) return 'pool'
   const onLand: readonly Position[] = ['warm-hide', 'humid-hide', 'cool-hide', 'shade', 'substrate']
   const landPlaces = onLand.filter((position) => positions.has(position)).length
   if (landPlaces > 1) return 'dish'
@@ -98,7 +103,7 @@ export function planEnclosure(facts: EnclosureFacts): EnclosurePlan {
   const { positions, classification } = facts
   const hasBasking = positions.has('basking-surface') || positions.has('basking-air')
   const hasGradient = END_POSITIONS.some((position) => positions.has(position))
-  const water = chooseWater(positions, hasBasking)
+  const water = chooseWater(facts, hasBasking)
   const ground = chooseGround(facts, water, hasGradient)
   const hasBurrow = ground === 'deep'
   const microhabitat = classification?.microhabitat ?? ''
@@ -108,7 +113,9 @@ export function planEnclosure(facts: EnclosureFacts): EnclosurePlan {
     ({ thing, position }) => positions.has(position) && (thing !== 'water-dish' || water === 'dish'),
   )
   const left = hasBasking ? 322 : hasBurrow ? 420 : 130
-  const right = water === 'pool' ? 380 : 690
+  // Beside a pool the land is short: things stand close, and the water begins behind the last of them.
+  const right = water === 'pool' ? left + POOL_STEP * (things.length - 1) : 690
+  const poolX = water === 'pool' ? (things.length === 0 ? 336 : right + 40) : null
   const step = things.length <= 1 ? 0 : (right - left) / (things.length - 1)
   const alone = water === 'pool' ? left : things[0]?.thing === 'cool-hide' ? right : (left + right) / 2
   const floor = things.map(({ thing }, index) => ({
@@ -136,7 +143,8 @@ export function planEnclosure(facts: EnclosureFacts): EnclosurePlan {
     water,
     hasBurrow,
     floor,
-    floorScale: step > 0 && step < 112 ? 0.8 : 1,
+    floorScale: water === 'pool' ? 0.66 : step > 0 && step < 112 ? 0.8 : 1,
+    poolX,
     animal: shape === null ? null : { shape, ...restsAt },
     points: {
       'basking-surface': { x: PERCH_X + 34, y: perch === 'branch' ? -60 : -52 },
@@ -150,7 +158,7 @@ export function planEnclosure(facts: EnclosureFacts): EnclosurePlan {
       substrate: hasBurrow ? { x: 300, y: 80 } : { x: hasBasking ? 268 : 210, y: 24 },
       water:
         water === 'pool'
-          ? { x: 590, y: 44 }
+          ? { x: Math.round(((poolX ?? 336) + PLAN_RIGHT) / 2) + 30, y: 44 }
           : water === 'tank'
             ? { x: 470, y: -60 }
             : { x: xOf('water-dish', 600), y: 8 },

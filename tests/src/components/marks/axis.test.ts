@@ -12,7 +12,7 @@ describe('the axis', () => {
   test.each<[string, number[], Unit, number, number]>([
     ['holds every value with round ends', [12, 40, 46, 54], 'degC', 0, 60],
     ['does not start below what it needs', [22, 26], 'degC', 18, 30],
-    ['goes below zero where the values do', [-6, 4], 'degC', -10, 5],
+    ['goes below zero where the values do', [-6, 4], 'degC', -8, 6],
     ['widens a single value to something that can be drawn', [25], 'degC', 20, 30],
     ['starts a UV index at zero', [4, 4.5], 'uvi', 0, 5],
     ['shows the whole of humidity', [70, 85], 'percentRh', 0, 100],

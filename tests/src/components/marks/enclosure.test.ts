@@ -75,6 +75,9 @@ describe('what an enclosure is drawn with', () => {
 
   test('water is a pool to one who basks beside it, a tank to one who lives in it, a dish among hides', () => {
     expect(plan(['basking-surface', 'water', 'cool-end-air']).water).toBe('pool')
+    const land: Position[] = ['basking-surface', 'water', 'warm-hide', 'shade', 'substrate']
+    expect(plan(land).water).toBe('dish')
+    expect(plan(land, { microhabitat: 'Semi-Aquatic' })).toMatchObject({ water: 'pool', ground: 'bank' })
     expect(plan(['water']).water).toBe('tank')
     expect(plan(['warm-hide', 'cool-hide', 'water']).water).toBe('dish')
     expect(plan(['basking-surface']).water).toBe('none')

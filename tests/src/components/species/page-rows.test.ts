@@ -75,7 +75,7 @@ describe('the day’s targets', () => {
     const targets = listTargets(listAnswers(both, adultByDay), units)
     const basking = targets.find(({ position }) => position === 'basking-air')
     expect(basking?.lines.map(({ text }) => plain(text))).toEqual(['36 – 38 °C', '3.0 – 5.0 UVI'])
-    expect(basking?.lines.map(({ spoken }) => spoken)).toEqual([
+    expect(basking?.lines.map(({ spoken }) => plain(spoken))).toEqual([
       'temperature 36 to 38 °C',
       'UV index 3.0 to 5.0 UVI',
     ])
