@@ -26,6 +26,7 @@ import { GroundFloor1764600000000 } from './migrations/1764600000000-ground-floo
 import { RateLimit1764600000001 } from './migrations/1764600000001-rate-limit.js'
 import { NameSearch1764600000002 } from './migrations/1764600000002-name-search.js'
 import { CurrentPage1764600000003 } from './migrations/1764600000003-current-page.js'
+import { EpochAtCommit1764600000004 } from './migrations/1764600000004-epoch-at-commit.js'
 import { PostgresNaming } from './postgres-naming.js'
 
 /** A data source for a PostgreSQL address, not yet connected; call `initialize()`, and `destroy()` when done. */
@@ -70,6 +71,7 @@ export function createDataSource(url: string, options: { poolSize?: number } = {
       RateLimit1764600000001,
       NameSearch1764600000002,
       CurrentPage1764600000003,
+      EpochAtCommit1764600000004,
     ],
     migrationsTableName: 'migration',
   })

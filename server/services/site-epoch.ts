@@ -19,7 +19,8 @@ const FIND_SITE_EPOCH = { name: 'find-site-epoch', text: 'select number::text as
 
 /**
  * Moves the epoch of what the public pages show, once per transaction however often it is called, and tells every listening
- * server when the transaction commits.
+ * server when the transaction commits. Publishing, sources and datasets move it by themselves, by triggers at the commit; this is
+ * for what else changes a page. Call it last: until the commit everybody else's publishing waits.
  */
 export async function moveSiteEpoch(db: EntityManager): Promise<void> {
   await queryPrepared(db, MOVE_SITE_EPOCH, [])

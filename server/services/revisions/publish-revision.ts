@@ -2,8 +2,8 @@ import type { EntityManager } from 'typeorm'
 import type { PageItem } from '../../../shared/revisions.js'
 import { Conflict, InvalidInput, NotFound, type FieldError } from '../../errors.js'
 import { queryPrepared } from '../../prepared.js'
+import { isStorable } from '../../storable.js'
 import { requireTransaction } from '../../transactions.js'
-import { moveSiteEpoch } from '../site-epoch.js'
 import { requirePageContent, type PageContent, type RecordSetInput } from './page-content.js'
 import { refreshProjections } from './projections.js'
 import { writeRecordSets, writeRows } from './write-rows.js'
@@ -215,15 +215,14 @@ async function insertRevision(
 
 /**
  * Publishes the whole content of a page as its next revision: the only function that changes what is published. Writes the rows
- * that are new, the revision with its items, the page's pointer and projections, and moves the site's epoch; at most twelve
- * statements, however long the page or its history. It needs the caller's transaction, so that it happens whole or not at all.
+ * that are new, the revision with its items, the page's pointer and projections; at most twelve statements, however long the page or its history. It needs the caller's transaction, so that it happens whole or not at all.
  *
  * Throws InvalidInput for content that contradicts itself or names what does not exist, NotFound for an unknown page, Conflict
  * where the base is no longer the current revision or another page has the name. All of these come before the first write.
  */
 export async function publishRevision(db: EntityManager, input: PublishInput): Promise<PublishedRevision> {
   requireTransaction(db, 'publishRevision')
-  if (input.summary.trim() === '') {
+  if (input.summary.trim() === '' || !isStorable(input.summary)) {
     throw new InvalidInput('A revision says in a few words what it changes.', [
       { path: 'summary', message: 'Say in a few words what changes.' },
     ])
@@ -246,6 +245,5 @@ export async function publishRevision(db: EntityManager, input: PublishInput): P
   const rowHashes = await writeRows(db, content.items)
   const published = await insertRevision(db, page, content, input, rowHashes)
   await refreshProjections(db, page.id)
-  await moveSiteEpoch(db)
   return published
 }

@@ -1,6 +1,5 @@
 import type { EntityManager } from 'typeorm'
 import { requireTransaction } from '../../transactions.js'
-import { moveSiteEpoch } from '../site-epoch.js'
 
 /** That the first source is the second one under another record. */
 export interface SourceMerge {
@@ -29,5 +28,4 @@ export async function mergeSources(db: EntityManager, merges: readonly SourceMer
   requireTransaction(db, 'mergeSources')
   const given = merges.map(({ fromId, intoId }) => ({ from_id: fromId, into_id: intoId }))
   await db.query(MERGE_SOURCES, [JSON.stringify(given)])
-  await moveSiteEpoch(db)
 }

@@ -7,7 +7,6 @@ import { cslItemSchema, sourceKindSchema, type CslItem, type SourceKind } from '
 import { InvalidInput } from '../../errors.js'
 import { isStorable } from '../../storable.js'
 import { requireTransaction } from '../../transactions.js'
-import { moveSiteEpoch } from '../site-epoch.js'
 import { toReferenceKey } from './reference-key.js'
 import { SourceRegister } from './source-register.js'
 import { mergeSources } from './merge-sources.js'
@@ -146,7 +145,6 @@ export async function saveSources(
     await db.query(COMPLETE_KEYS, [JSON.stringify(keys)])
   }
   await mergeSources(db, register.merges())
-  if (added.length > 0 || completed.length > 0) await moveSiteEpoch(db)
   return placed.map(({ id }) => ({ id: register.heirOf(id) }))
 }
 

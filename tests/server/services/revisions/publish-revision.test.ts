@@ -371,6 +371,7 @@ describe('content that contradicts itself', () => {
     const renamed = { ...known.recordSet, hash: 'a'.repeat(64) }
     expect(await findErrors([name], { recordSets: [renamed] })).toEqual(['recordSets.0.hash'])
     expect(await findErrors([makeNameItem()], { summary: '  ' })).toEqual(['summary'])
+    expect(await findErrors([makeNameItem()], { summary: 'a\0b' })).toEqual(['summary'])
   })
 
   test("is refused where an item is another page's, or was of another kind", async () => {
@@ -420,5 +421,26 @@ describe('the epoch of the public pages', () => {
     await listener.query('select 1')
     expect(heard).toEqual([after])
     await listener.end()
+  })
+
+  test('lets two publish at once, so that no long import holds up another page', async () => {
+    const run = dataSource.createQueryRunner()
+    await run.startTransaction()
+    const input = {
+      species: { isInvented: true },
+      baseRevisionId: null,
+      recordSets: [],
+      summary: 'Of a long import.',
+      broughtBy: { form: 'demonstration' as const },
+      publishedAt: PUBLISHED_AT,
+    }
+    await publishRevision(run.manager, { ...input, items: [makeNameItem()] })
+    const before = BigInt(await findSiteEpoch(dataSource.manager))
+    const meanwhile = await publish(dataSource, [makeNameItem()])
+    expect(meanwhile.number).toBe(1)
+    await publishRevision(run.manager, { ...input, items: [makeNameItem()] })
+    await run.commitTransaction()
+    await run.release()
+    expect(await findSiteEpoch(dataSource.manager)).toBe(String(before + 2n))
   })
 })
