@@ -87,7 +87,8 @@ function answerAt(
   const othersHere = selection.others.some(({ range }) => range.row.position === place.position)
   return {
     rows: own.map((range) => ({ range, lower: selection.lower, upper: selection.upper })),
-    isUnanswered: own.length === 0 && othersHere,
+    // Where the whole enclosure's row answers, nothing is missing: it stands in the list once, as itself.
+    isUnanswered: selection.judged.length === 0 && othersHere,
   }
 }
 

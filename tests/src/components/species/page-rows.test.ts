@@ -50,6 +50,14 @@ describe('rows that answer the page’s question', () => {
     expect(answer?.rows[0]?.upper).toMatchObject({ value: 50, isInherited: true })
   })
 
+  test('a place that the row of the whole enclosure answers for is not missing', () => {
+    const whole = makeRange({ position: 'whole-enclosure', season: 'brumation', period: 'any' })
+    const cool = { ...adultByDay, season: 'brumation' } as const
+    const [answer] = listAnswers([...ranges, whole], cool)
+    expect(answer?.rows.map(({ range }) => range.row.position)).toEqual(['warm-end-air', 'whole-enclosure'])
+    expect(answer?.unanswered.map(({ position }) => position)).toEqual(['basking-surface'])
+  })
+
   test('a parameter with nothing to say at night is left out', () => {
     expect(rowsOf('uv-index', { ...adultByDay, period: 'night' })).toBeUndefined()
   })
