@@ -11,7 +11,9 @@ export default defineConfig({
   fullyParallel: false,
   workers: 2,
   retries: 0,
-  timeout: 60_000,
+  // Long enough for a machine that does other work beside; nothing here waits for time to pass.
+  timeout: 120_000,
+  expect: { timeout: 20_000 },
   reporter: [['list'], ['json', { outputFile: process.env.E2E_REPORT ?? '../../test-results/e2e.json' }]],
   use: {
     baseURL,
