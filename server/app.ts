@@ -4,7 +4,7 @@ import type { Express, RequestHandler } from 'express'
 import type { DataSource } from 'typeorm'
 import type { Config } from './config.js'
 import type { Log } from './log.js'
-import { errorHandler, refuseUnknownAddress } from './middleware/error-handler.js'
+import { errorHandler, refuseUnknownAddress, toAppError } from './middleware/error-handler.js'
 import { requestLog } from './middleware/request-log.js'
 import { requireSameOrigin } from './middleware/same-origin.js'
 import { securityHeaders } from './middleware/security-headers.js'
@@ -16,6 +16,7 @@ import { health } from './routes/health.js'
 import { servePages } from './routes/pages.js'
 import { preferences } from './routes/preferences.js'
 import { createReader } from './routes/read.js'
+import type { Reader } from './routes/read.js'
 import { listReads } from './routes/reads.js'
 import { sitemap } from './routes/sitemap.js'
 
@@ -45,10 +46,28 @@ export function createApp({ dataSource, config, log, renderer, epoch }: AppParts
   app.use(preferences(origin))
   app.use('/api', refuseUnknownAddress)
   app.use(serveFiles(renderer, config))
-  app.use(servePages({ renderer, epoch, origin, read: (path) => reader(dataSource.manager, path) }))
+  app.use(servePages({ renderer, epoch, origin, read: readForPages(reader, dataSource, log) }))
   app.use(refuseUnknownAddress)
   app.use(errorHandler(log))
   return app
+}
+
+/** Reads for a page, which shows what went wrong instead of failing: so a fault of ours is logged here. */
+function readForPages(
+  reader: Reader,
+  dataSource: DataSource,
+  log: Log,
+): (apiPath: string) => Promise<unknown> {
+  return async (apiPath) => {
+    try {
+      return await reader(dataSource.manager, apiPath)
+    } catch (error) {
+      const known = toAppError(error)
+      if (known === null || known.status >= 500)
+        log.error({ err: error }, 'A page could not read what it shows.')
+      throw known ?? error
+    }
+  }
 }
 
 /** The client's files. Built ones have a dot in their last name and no page has, so a page never waits for a look at the disk. */

@@ -28,7 +28,10 @@ export interface Pages {
 export function servePages({ renderer, epoch, origin, read }: Pages): RequestHandler {
   const cache = new HtmlCache(CACHE_BYTES_MAX)
   return async (request, response, next) => {
-    if (request.method !== 'GET' && request.method !== 'HEAD') {
+    // A request line may also hold a whole address or an asterisk; neither is a page's.
+    const isForPage =
+      request.originalUrl.startsWith('/') && (request.method === 'GET' || request.method === 'HEAD')
+    if (!isForPage) {
       next()
       return
     }
@@ -57,13 +60,14 @@ export function servePages({ renderer, epoch, origin, read }: Pages): RequestHan
 
 /** The one address of a page that was asked for with a slash at the end or capitals in its slug; null where it is right. */
 export function findTrueAddress(url: string): string | null {
-  const [path = '', ...rest] = url.split('?')
-  const search = rest.length === 0 ? '' : `?${rest.join('?')}`
+  const start = url.indexOf('?')
+  const path = start === -1 ? url : url.slice(0, start)
+  const search = start === -1 ? '' : url.slice(start)
   // Several slashes or backslashes at the start would make the new address one of another host.
   let right = path.replace(/[/\\]{2,}/g, '/').replace(/(?!^)\/+$/, '')
-  const slug = /^\/species\/([^/]+)/.exec(right)?.[1]
-  if (slug !== undefined && /[A-Z]/.test(slug.replace(/%[0-9A-Fa-f]{2}/g, ''))) {
-    right = right.replace(slug, slug.toLowerCase())
+  const [, species, slug = '', rest = ''] = /^(\/species\/)([^/]+)(.*)$/.exec(right) ?? []
+  if (species !== undefined && /[A-Z]/.test(slug.replace(/%[0-9A-Fa-f]{2}/g, ''))) {
+    right = species + slug.toLowerCase() + rest
   }
   return right === path ? null : right + search
 }

@@ -62,13 +62,14 @@ function refuseZeroBytes(query: RawQuery): void {
   }
 }
 
+/** Answers the read at an address below /api/v1. */
+export type Reader = (db: EntityManager, apiPath: string) => Promise<unknown>
+
 /** Gives what finds the read of an address below /api/v1 and answers it as the value its JSON text stands for. */
-export function createReader(
-  reads: readonly Read[],
-): (db: EntityManager, apiPath: string) => Promise<unknown> {
+export function createReader(reads: readonly Read[]): Reader {
   const routes = reads.map((read) => ({ read, parts: read.path.split('/') }))
   return async (db, apiPath) => {
-    const { pathname, searchParams } = new URL(apiPath, 'http://localhost')
+    const { pathname, searchParams } = new URL(`http://localhost${apiPath}`)
     const asked = pathname.split('/').map(decodeURIComponent)
     for (const { read, parts } of routes) {
       const params = matchParts(parts, asked)

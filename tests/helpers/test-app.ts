@@ -27,8 +27,8 @@ export interface TestApp {
 }
 
 /**
- * A renderer that stands in for the built client: a species page's text is its scientific name, any other page's is its
- * address, and a failed read gives its status.
+ * A renderer that stands in for the built client: a species page's text is its scientific name, a listing's how many
+ * there are, any other page's its address, and a failed read gives its status.
  */
 export function createTestRenderer(): PageRenderer & { renders: () => number } {
   let renders = 0
@@ -51,10 +51,10 @@ export function createTestRenderer(): PageRenderer & { renders: () => number } {
 
 async function writeText(url: string, input: RenderInput): Promise<string | number> {
   if (url === '/broken') throw new Error('The renderer failed.')
-  if (!url.startsWith('/species/')) return url
+  if (!url.startsWith('/species')) return url
   try {
-    const page = (await input.read(url)) as { species: { scientificName: string } }
-    return page.species.scientificName
+    const answer = (await input.read(url)) as { species?: { scientificName: string }; total?: number }
+    return answer.species?.scientificName ?? `${answer.total} species`
   } catch (error) {
     return (error as { status: number }).status
   }

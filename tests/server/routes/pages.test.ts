@@ -107,7 +107,7 @@ describe('GET a page', () => {
 
   it('takes no place in the cache with a parameter nobody knows, nor with a very long address', async () => {
     const before = test.renders()
-    for (const path of ['/about?utm_source=x', `/species?q=${'x'.repeat(600)}`]) {
+    for (const path of ['/about?utm_source=x', `/sources?q=${'x'.repeat(600)}`]) {
       await get(path).expect(200)
       await get(path).expect(200)
     }
@@ -122,6 +122,11 @@ describe('GET a page', () => {
     await get('/species/no-such-page').expect(404)
     await get('/species/no-such-page').expect(404)
     expect(test.renders()).toBe(before + 2)
+  })
+
+  it('that asks for what cannot be answers with the status of the refusal', async () => {
+    await get('/species?limit=1000').expect(400)
+    await get('/species/lacerta-inventa?revision=0').expect(400)
   })
 
   it('that fails is answered with a page that gives a number to report', async () => {
@@ -171,7 +176,9 @@ describe('GET a page under an address that is not its own', () => {
 
   it.each([
     ['/', null],
-    ['/species/a-b?q=A/', null],
+    ['/species/a-b?q=A/?', null],
+    ['/species/$&A', '/species/$&a'],
+    ['/species/peCies/', '/species/pecies'],
     ['/species/%C3%A4', null],
     ['//elsewhere.example/', '/elsewhere.example'],
     ['/\\elsewhere.example/', '/elsewhere.example'],
