@@ -176,7 +176,9 @@ export function useChecker(start: {
 
   adopt(start.input, start.asked)
 
-  watch([() => start.page().ranges, asked], () => arrange(rows.value), { deep: true })
+  watch([() => start.page().ranges, () => asked.value.lifeStage, () => asked.value.season], () =>
+    arrange(rows.value),
+  )
   watch(unit, (chosen) => {
     for (const row of rows.value) {
       if (isEmpty(row) && row.form.parameter === 'temperature') row.form.unit = chosen

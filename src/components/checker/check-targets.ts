@@ -1,7 +1,12 @@
 import type { ReadingVerdict } from '../../../shared/checker/check.js'
-import { compareStandings, type Standing } from '../../../shared/checker/verdict.js'
+import { compareStandings } from '../../../shared/checker/verdict.js'
 import { writeValue } from '../../../shared/checker/explain-value.js'
-import { toReaderUnit, type ReaderUnits } from '../../../shared/format.js'
+import {
+  formatRowBounds,
+  toReaderUnit,
+  writeBoundsWithUnit,
+  type ReaderUnits,
+} from '../../../shared/format.js'
 import { PARAMETER_SHORT_LABELS } from '../../../shared/labels.js'
 import type { CitedRange } from '../../../shared/species.js'
 import type { Reading } from '../../../shared/checker/reading.js'
@@ -17,24 +22,29 @@ export interface LandedReading {
   address: string
 }
 
-function findWorst(standings: readonly Standing[]): Standing | null {
-  return [...standings].sort(compareStandings)[0] ?? null
-}
-
 function writeLine({ reading, verdict }: LandedReading, units: ReaderUnits): TargetLine {
   const text = writeValue(verdict.measured.value, toReaderUnit(verdict.measured.unit, units))
+  const isMaximum = reading.uvMeaning === 'maximum'
   const name = PARAMETER_SHORT_LABELS[reading.parameter].toLowerCase().replace('uv', 'UV')
   return {
     parameter: reading.parameter,
-    text: `read ${text}`,
-    spoken: `${name} read ${text}`,
+    text: isMaximum ? `read ${text} peak` : `read ${text}`,
+    spoken: `${isMaximum ? 'highest ' : ''}${name} read ${text}`,
     standing: verdict.standing,
   }
 }
 
+/** The text of the target that a reading was held against, as `listTargets` writes it; null where the place has none. */
+function findTargetText({ reading, verdict }: LandedReading, units: ReaderUnits): string | null {
+  const judgedBy = verdict.rows.find(({ itemId }) => itemId === verdict.range.itemId)?.row
+  if (judgedBy === undefined || judgedBy.position !== reading.position) return null
+  const bounds = writeBoundsWithUnit(formatRowBounds(judgedBy, units))
+  return judgedBy.uvMeaning === 'maximum' ? `${bounds} peak` : bounds
+}
+
 /**
- * The targets of one period with the readings landed on them: a target that was read shows what was read and the worst
- * verdict there; a reading where the page has no target of its own gets a line for itself.
+ * The targets of one period with the readings landed on them: in the place of a target that was read stands what was
+ * read and its verdict, the worst of several first; a reading where the page has no target gets a line for itself.
  */
 export function landReadings(
   ranges: readonly CitedRange[],
@@ -43,30 +53,22 @@ export function landReadings(
   units: ReaderUnits,
 ): EnclosureTarget[] {
   const targets = listTargets(listAnswers(ranges, asked), units)
-  const here = landed.filter(({ reading }) => reading.period === asked.period)
-  const byPosition = new Map(
-    targets.map((target) => [target.position, { ...target, lines: [...target.lines] }]),
-  )
+  const here = landed
+    .filter(({ reading }) => reading.period === asked.period)
+    .sort((a, b) => compareStandings(a.verdict.standing, b.verdict.standing))
   for (const entry of here) {
     const { position, parameter } = entry.reading
-    const target = byPosition.get(position) ?? { position, lines: [], address: entry.address }
-    target.address = entry.address
-    const same = here.filter(
-      ({ reading }) => reading.position === position && reading.parameter === parameter,
-    )
-    const isFirst = same[0] === entry
-    if (isFirst) {
-      target.lines = target.lines.filter((line) => line.parameter !== parameter)
-      for (const other of same) {
-        const line = writeLine(other, units)
-        const twin = target.lines.find(
-          ({ text, parameter: named }) => text === line.text && named === parameter,
-        )
-        if (twin) twin.standing = findWorst([twin.standing, line.standing].filter((mark) => mark !== null))
-        else target.lines.push(line)
-      }
+    let target = targets.find((known) => known.position === position)
+    if (target === undefined) {
+      target = { position, lines: [], address: entry.address }
+      targets.push(target)
     }
-    byPosition.set(position, target)
+    const line = writeLine(entry, units)
+    if (target.lines.some((other) => other.text === line.text && other.parameter === parameter)) continue
+    const text = findTargetText(entry, units)
+    const place = target.lines.findIndex((other) => other.text === text && other.parameter === parameter)
+    if (place === -1) target.lines.push(line)
+    else target.lines[place] = line
   }
-  return [...byPosition.values()].sort((a, b) => comparePositions(a.position, b.position))
+  return targets.sort((a, b) => comparePositions(a.position, b.position))
 }
