@@ -79,7 +79,8 @@ export const darkColours: ColourTokens = {
   shadow: 'rgb(0 0 0 / 50%)',
 }
 
-export const fontFamily = "'Fira Sans', 'Fira Sans Stand-in', system-ui, sans-serif"
+export const fontFamily =
+  "'Fira Sans', 'Fira Sans Stand-in', 'Fira Sans Wide Stand-in', system-ui, sans-serif"
 
 /** Sizes that several components share, written as CSS lengths. */
 export const sizeTokens = {
