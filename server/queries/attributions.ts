@@ -21,20 +21,13 @@ const FIND_ATTRIBUTIONS = {
       select * from dataset_version where dataset_version.dataset_id = dataset.id order by imported_at desc, id limit 1
     ) version on true
     left join (
-      select dataset_id, count(distinct species_id)::int as pages from (
-        select dataset_version.dataset_id, revision.species_id
-        from revision join dataset_version on dataset_version.id = revision.dataset_version_id
-        union all
-        select physiology_row.dataset_id, species.id
-        from physiology_row
-        join revision_item on revision_item.row_hash = physiology_row.hash and revision_item.kind = 'physiology'
-        join species on species.current_revision_id = revision_item.revision_id
-        where physiology_row.form = 'dataset'
-      ) touched group by dataset_id
+      select dataset_version.dataset_id, count(distinct revision.species_id)::int as pages
+      from revision join dataset_version on dataset_version.id = revision.dataset_version_id
+      group by dataset_version.dataset_id
     ) brought on brought.dataset_id = dataset.id`,
 }
 
-/** The datasets whose rows stand on pages, with their licences, the account of the newest import, and how many pages each has part in. */
+/** The datasets whose rows stand on pages, with their licences, the account of the newest import, and how many pages each changed. */
 export async function findAttributions(db: EntityManager): Promise<Attributions> {
   const [found] = await queryPrepared<Attributions>(db, FIND_ATTRIBUTIONS, [])
   return { datasets: found?.datasets ?? [] }

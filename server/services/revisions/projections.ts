@@ -158,7 +158,7 @@ function projectionStatements(scope: 'page' | 'all'): Prepared[] {
       union all
       select species.id, cited.source_id, 0, 0 from ${current('prose', 'prose_row')}
       cross join unnest(stored.source_ids) cited (source_id)
-    ) cited join species on species.id = cited.species_id
+    ) cited join species on species.id = cited.species_id and ${where('species.id')}
     group by source_id, species.id, species.scientific_name`
 
   return Object.entries({ clear, names, ranges, page, content, citations }).map(([name, text]) => ({

@@ -71,8 +71,9 @@ const FIND_CONTRADICTIONS = {
         as "missingSources",
       array(
         select named.hash from jsonb_to_recordset($2::jsonb) as named (hash text, dataset_id text)
-        where not exists (
-          select from record_set where record_set.hash = decode(named.hash, 'hex') and record_set.dataset_id = named.dataset_id
+        -- A scalar look-up, because a join would be planned to read the whole table.
+        where named.dataset_id is distinct from (
+          select record_set.dataset_id from record_set where record_set.hash = decode(named.hash, 'hex')
         )
       ) as "missingRecordSets",
       array(
