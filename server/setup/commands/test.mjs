@@ -7,7 +7,8 @@ import { runCommand } from '../run.mjs'
 import { complain, say, secondsSince, SetupProblem } from '../say.mjs'
 import { countVitest, readCount } from '../test-reports.mjs'
 
-const LONGEST_MS = 25 * 60_000
+/** The bar is 25 minutes on two processors; a machine that is busy with other things may be given more. */
+const longestMinutes = Number(process.env.TEST_MINUTES) || 25
 const bin = (/** @type {string} */ name) => join(root, 'node_modules/.bin', name)
 
 /** What is asked of the code before it runs. */
@@ -36,7 +37,8 @@ async function runUnitTests(run) {
 
 await runCommand(async (run) => {
   const startedAt = Date.now()
-  setTimeout(() => run.fail(new SetupProblem('The tests took longer than 25 minutes.')), LONGEST_MS).unref()
+  const overtime = new SetupProblem(`The tests took longer than ${longestMinutes} minutes.`)
+  setTimeout(() => run.fail(overtime), longestMinutes * 60_000).unref()
   let passed = 0
   let failed = 0
   /**
