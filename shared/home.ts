@@ -2,7 +2,11 @@ import { z } from 'zod'
 import { revisionMarkSchema } from './revisions.js'
 import { datasetBriefSchema, sourceBriefSchema } from './sources.js'
 
-const pageRefSchema = z.strictObject({ slug: z.string(), scientificName: z.string(), isInvented: z.boolean() })
+const pageRefSchema = z.strictObject({
+  slug: z.string(),
+  scientificName: z.string(),
+  isInvented: z.boolean(),
+})
 
 /** `GET /api/v1/home`. */
 export const homeAnswerSchema = z.strictObject({
@@ -28,9 +32,7 @@ export type RevisionList = z.infer<typeof revisionListSchema>
 /** `GET /api/v1/sources/:id`: a source and the pages whose current revision cites it. */
 export const sourcePageSchema = z.strictObject({
   source: sourceBriefSchema,
-  citedBy: z.array(
-    z.strictObject({ ...pageRefSchema.shape, ranges: z.int(), physiology: z.int() }),
-  ),
+  citedBy: z.array(z.strictObject({ ...pageRefSchema.shape, ranges: z.int(), physiology: z.int() })),
   citedByTotal: z.int(),
   nextCursor: z.string().nullable(),
 })

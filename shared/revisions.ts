@@ -32,7 +32,12 @@ export const revisionMarkSchema = z.strictObject({
   summary: z.string(),
   /** Who brought it: a dataset with its version, or people once accounts exist. */
   broughtBy: z.discriminatedUnion('form', [
-    z.strictObject({ form: z.literal('dataset'), datasetId: z.string(), title: z.string(), version: z.string() }),
+    z.strictObject({
+      form: z.literal('dataset'),
+      datasetId: z.string(),
+      title: z.string(),
+      version: z.string(),
+    }),
     z.strictObject({ form: z.literal('demonstration') }),
   ]),
 })

@@ -5,7 +5,13 @@ export const cslItemSchema = z.looseObject({
   type: z.string(),
   title: z.string().optional(),
   author: z
-    .array(z.looseObject({ family: z.string().optional(), given: z.string().optional(), literal: z.string().optional() }))
+    .array(
+      z.looseObject({
+        family: z.string().optional(),
+        given: z.string().optional(),
+        literal: z.string().optional(),
+      }),
+    )
     .optional(),
   issued: z.looseObject({ 'date-parts': z.array(z.array(z.number())).optional() }).optional(),
   'container-title': z.string().optional(),
@@ -16,7 +22,16 @@ export const cslItemSchema = z.looseObject({
 })
 export type CslItem = z.infer<typeof cslItemSchema>
 
-export const sourceKindSchema = z.enum(['article', 'book', 'thesis', 'report', 'dataset', 'law', 'web-page', 'other'])
+export const sourceKindSchema = z.enum([
+  'article',
+  'book',
+  'thesis',
+  'report',
+  'dataset',
+  'law',
+  'web-page',
+  'other',
+])
 export type SourceKind = z.infer<typeof sourceKindSchema>
 
 /** A source as a page shows it. */
