@@ -24,7 +24,7 @@ export function usePageHead(head: MaybeRefOrGetter<PageHead>): void {
   // Resolved once: while a page is left, the route already names the next one.
   const ownPath = route.path
   const page = computed(() => toValue(head))
-  const title = computed(() => (page.value.title ? `${page.value.title} · Mossgauge` : 'Mossgauge'))
+  const title = computed(() => `${page.value.title} · Mossgauge`)
   const address = computed(() => context.origin + (page.value.path ?? ownPath))
   useHead({
     title: () => title.value,
@@ -32,7 +32,7 @@ export function usePageHead(head: MaybeRefOrGetter<PageHead>): void {
       { name: 'description', content: () => page.value.description },
       { name: 'robots', content: () => (page.value.isUnlisted ? 'noindex' : 'index, follow') },
       { property: 'og:site_name', content: 'Mossgauge' },
-      { property: 'og:title', content: () => page.value.title || 'Mossgauge' },
+      { property: 'og:title', content: () => page.value.title },
       { property: 'og:description', content: () => page.value.description },
       { property: 'og:type', content: () => page.value.type ?? 'website' },
       { property: 'og:url', content: () => address.value },
