@@ -63,6 +63,7 @@ async function stop(signal: string): Promise<void> {
   // A connection that is kept alive is idle only once its answer is out.
   const sweep = setInterval(() => server.closeIdleConnections(), 50)
   const patience = new Promise((resolve) => setTimeout(resolve, STOP_PATIENCE_MS).unref())
+  // In development Vite's sockets would stay open to the end of patience; what it still renders then is cut off.
   await renderer.close()
   await Promise.race([closed, patience])
   clearInterval(sweep)

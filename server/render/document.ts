@@ -14,12 +14,17 @@ export function assembleDocument(shell: string, page: RenderedPage, links: strin
   const state = `<script type="application/json" id="page-state">${page.state}</script>`
   // The last place first, so that no piece is taken for a place; by functions, so that no dollar sign is a pattern.
   const html = shell
-    .replace(HTML_TAG, (tag) => (page.htmlAttrs === '' ? tag : `<html ${page.htmlAttrs}>`))
-    .replace(BODY_TAG, (tag) => (page.bodyAttrs === '' ? tag : `<body ${page.bodyAttrs}>`))
+    .replace(HTML_TAG, (tag) => writeTag('html', page.htmlAttrs, tag))
+    .replace(BODY_TAG, (tag) => writeTag('body', page.bodyAttrs, tag))
     .replace('<!--state-->', () => state)
     .replace('<!--app-->', () => page.html)
     // After the shell's own styles, as where the browser loads them: the order decides between equals.
     .replace('</head>', () => `${links}</head>`)
     .replace('<!--head-->', () => [page.headTags, page.css].join('\n'))
   return { status: page.status, location: page.location, html, cacheable: page.cacheable }
+}
+
+/** The page's own tag, or the shell's where the page has nothing to say. */
+function writeTag(name: string, attributes: string, shellTag: string): string {
+  return attributes.trim() === '' ? shellTag : `<${name} ${attributes.trim()}>`
 }

@@ -10,7 +10,7 @@ const PAGE: RenderedPage = {
   location: null,
   html: '<main>Page</main>',
   headTags: '<title>Title</title>',
-  htmlAttrs: 'lang="en" data-theme="dark"',
+  htmlAttrs: ' lang="en" data-theme="dark"',
   bodyAttrs: '',
   state: '{"a":1}',
   css: '<style>a{}</style>',
