@@ -62,21 +62,17 @@ describe('the server process', () => {
     expect(said.out).toContain('ECONNREFUSED')
   })
 
-  it.each(['SIGTERM', 'SIGINT'] as const)(
-    'answers until %s, and then ends by itself',
-    async (signal) => {
-      const port = await findFreePort()
-      const { child, said, ended } = start({ DATABASE_URL: database.url, PORT: String(port) })
-      const answer = await vi.waitFor(() => fetch(`http://127.0.0.1:${port}/readyz`), {
-        timeout: 60_000,
-        interval: 100,
-      })
-      expect(answer.status).toBe(200)
-      child.kill('SIGTERM')
-      expect(await ended).toBe(0)
-      expect(said.out).toContain('The server stops.')
-      await expect(fetch(`http://127.0.0.1:${port}/healthz`)).rejects.toThrow()
-    },
-    90_000,
-  )
+  it('answers until it is told to stop, and then ends by itself', async () => {
+    const port = await findFreePort()
+    const { child, said, ended } = start({ DATABASE_URL: database.url, PORT: String(port) })
+    const answer = await vi.waitFor(() => fetch(`http://127.0.0.1:${port}/readyz`), {
+      timeout: 60_000,
+      interval: 100,
+    })
+    expect(answer.status).toBe(200)
+    child.kill('SIGTERM')
+    expect(await ended).toBe(0)
+    expect(said.out).toContain('The server stops.')
+    await expect(fetch(`http://127.0.0.1:${port}/healthz`)).rejects.toThrow()
+  }, 90_000)
 })

@@ -10,7 +10,7 @@ import { securityHeaders } from '../../../server/middleware/security-headers.js'
 async function headersFor(part: Partial<Config>): Promise<Record<string, string>> {
   const config = { environment: 'production' as const, publicUrl: 'http://127.0.0.1:8080', ...part }
   const app = express().use(...securityHeaders(config), (_request, response) => void response.send('done'))
-  return (await request(app).get('/').expect(200)).headers as Record<string, string>
+  return (await request(app).get('/').expect(200)).headers
 }
 
 describe('securityHeaders', () => {
