@@ -2,7 +2,7 @@ import type { FirstChange } from './check.js'
 import { DIM_RATIO_MIN } from './policy.js'
 
 /** What is wrong with the reading a change is for. */
-export type Trouble = 'past-upper-limit' | 'too-hot' | 'too-cool'
+export type Trouble = 'past-upper-limit' | 'body-heat-danger' | 'too-hot' | 'too-cool'
 
 /** What a rule looks at, besides the trouble: day or night, and the power ratio r where it can be told. */
 export interface ChangeCircumstances {
@@ -10,7 +10,7 @@ export interface ChangeCircumstances {
   period: 'day' | 'night'
   /** r = (T_target − T_room)/(T_read − T_room); null when it cannot be told. */
   powerRatio: number | null
-  /** The room by itself is not clearly cooler than the target, so that no lamp setting reaches it. */
+  /** The room by itself is as warm as the target or warmer, so that no lamp setting reaches it. */
   isRoomAtTarget: boolean
 }
 
@@ -43,6 +43,16 @@ export const CHANGE_RULES: readonly ChangeRule[] = [
     source: COMMON_PRACTICE,
   },
   {
+    id: 'body-heat-danger',
+    trouble: 'body-heat-danger',
+    isUrgent: true,
+    advice:
+      'Turn down the heat at this place and get the animal to a cooler one now. Its body may not bear this temperature.',
+    assumes:
+      'The animal cannot get away from here, and the critical maximum named in the cautions holds for it.',
+    source: COMMON_PRACTICE,
+  },
+  {
     id: 'room-too-warm',
     trouble: 'too-hot',
     isRoomAtTarget: true,
@@ -60,7 +70,7 @@ export const CHANGE_RULES: readonly ChangeRule[] = [
     advice:
       'Set the thermostat of the night heat to a floor of {floor}, sensed where the animal sleeps, or switch the night heat off.',
     assumes:
-      'A heat source without light runs at night. The floor is the night low, half the thermostat’s swing and twice the uncertainty.',
+      'A heat source without light runs at night. The floor is the night low, half the thermostat’s swing and twice the uncertainty; no number is given where that would pass the night high or a limit.',
     source: COMMON_PRACTICE,
   },
   {
@@ -100,7 +110,8 @@ export const CHANGE_RULES: readonly ChangeRule[] = [
     isUrgent: false,
     advice:
       'Add a heat source without light under a thermostat with a floor of {floor}, sensed where the animal sleeps.',
-    assumes: 'The floor is the night low, half the thermostat’s swing and twice the uncertainty.',
+    assumes:
+      'The floor is the night low, half the thermostat’s swing and twice the uncertainty; no number is given where that would pass the night high or a limit.',
     source: COMMON_PRACTICE,
   },
   {

@@ -3,7 +3,7 @@ import type { CheckInput, CheckPage, CheckResult, GaugeDisagreement, ReadingVerd
 import { askBack } from './ask-back.js'
 import { toCanonical } from '../units.js'
 import { findFirstChange } from './change-first.js'
-import { findPhysiologyCautions } from './physiology-cautions.js'
+import { BASKING_POSITIONS, findPhysiologyCautions } from './physiology-cautions.js'
 import type { Reading } from './reading.js'
 import { selectRanges } from './selection.js'
 import { compareGauges, measureReading } from './uncertainty.js'
@@ -92,6 +92,11 @@ export function checkReadings(page: CheckPage, input: CheckInput): CheckResult {
       uncertaintyC: uncertainty,
       limit: limit.answer,
     }))
+  const physiologyCautions = findPhysiologyCautions(page, { lifeStage, season }, temperatures)
+  // A basking place may only seem to have no refuge, because the cooler places were not read.
+  const isHeatDanger = (index: number, reading: Reading) =>
+    !BASKING_POSITIONS.includes(reading.position) &&
+    physiologyCautions.some((found) => found.kind === 'near-critical-maximum' && found.readingIndex === index)
   const roomC = roomTemperature && toCanonical(roomTemperature.value, roomTemperature.unit)
   const { slug, scientificName, isInvented } = page.species
   const { id, number, publishedAt } = page.revision
@@ -103,7 +108,7 @@ export function checkReadings(page: CheckPage, input: CheckInput): CheckResult {
     verdicts,
     summary: summarise(verdicts.map(({ standing }) => standing)),
     gaugeDisagreements: findGaugeDisagreements(readings, verdicts),
-    physiologyCautions: findPhysiologyCautions(page, { lifeStage, season }, temperatures),
+    physiologyCautions,
     firstChange: findFirstChange(
       judged.map((entry) => ({
         readingIndex: entry.readingIndex,
@@ -114,6 +119,7 @@ export function checkReadings(page: CheckPage, input: CheckInput): CheckResult {
         standing: entry.standing,
         limit: entry.limit,
         range: entry.range,
+        isHeatDanger: isHeatDanger(entry.readingIndex, entry.reading),
       })),
       roomC,
     ),

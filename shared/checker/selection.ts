@@ -86,10 +86,10 @@ function findStrictest<R extends HasRow>(ranges: readonly R[], key: LimitKey) {
   return strictest
 }
 
-/** The limits of one side that hold at a position: each most specific row's own, else the strictest of all that match. */
-function findLimits<R extends HasRow>(matching: readonly R[], key: LimitKey): R[] {
-  const inherited = findStrictest(matching, key)
-  return keepMostSpecific(matching).flatMap((range) => {
+/** The limits of one side that hold at a position: each most specific row's own, else the strictest of all that lend. */
+function findLimits<R extends HasRow>(rows: readonly R[], lending: readonly R[], key: LimitKey): R[] {
+  const inherited = findStrictest(lending, key)
+  return keepMostSpecific(rows).flatMap((range) => {
     if (range.row[key] !== null) return [range]
     return inherited === null ? [] : [inherited.range]
   })
@@ -119,7 +119,10 @@ export function selectRanges<R extends HasRow>(ranges: readonly R[], asked: Aske
   const own = keepMostSpecific(matchingHere.filter(ofMeaning))
   const judged = own.length > 0 ? own : keepMostSpecific(matchingWhole.filter(ofMeaning))
   const holding = (key: LimitKey): HoldingLimit<R> | null => {
-    const limits = [...findLimits(matchingHere, key), ...findLimits(matchingWhole, key)]
+    const limits = [matchingHere, matchingWhole].flatMap((matching) => {
+      const meant = matching.filter(ofMeaning)
+      return findLimits(meant.length > 0 ? meant : matching, matching, key)
+    })
     const strictest = findStrictest(limits, key)
     return strictest && { ...strictest, isInherited: !judged.includes(strictest.range) }
   }

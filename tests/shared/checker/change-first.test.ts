@@ -23,6 +23,7 @@ function judge(value: number, row: Partial<RangeRow>, part: Partial<JudgedReadin
     standing: toStanding(limit, verdict),
     limit,
     range: verdict,
+    isHeatDanger: false,
     ...part,
   }
 }
@@ -76,6 +77,19 @@ describe('too hot', () => {
     expect(findFirstChange([judge(38, row)], 32)).toMatchObject({ ruleId: 'room-too-warm', powerRatio: null })
   })
 
+  it('does not blame a room that is cooler than the target, however coarse the instrument', () => {
+    const hot = judge(45, { low: 22, high: 28 }, { uncertainty: 2 })
+    expect(findFirstChange([hot], 22)).toMatchObject({ ruleId: 'less-heat', powerRatio: null })
+  })
+
+  it('gives no night floor that would carry the place over its night high', () => {
+    const row = { low: 20, high: 22 }
+    const hot = judge(26, row, { period: 'night', uncertainty: 1.83 })
+    expect(findFirstChange([hot], null)).toMatchObject({ ruleId: 'night-too-hot', thermostatFloorC: null })
+    const cold = judge(16, { ...row, high: 24, upperLimit: 22.5 }, { period: 'night', uncertainty: 0.3 })
+    expect(findFirstChange([cold], null)).toMatchObject({ ruleId: 'night-too-cool', thermostatFloorC: null })
+  })
+
   it('gives no number where only an upper bound is cited, since there is no middle', () => {
     expect(findFirstChange([judge(38, { high: 34 })], 20)).toMatchObject({
       ruleId: 'less-heat',
@@ -103,6 +117,20 @@ describe('too cool', () => {
   })
 })
 
+describe('near a limit with an instrument too coarse for the range', () => {
+  it('asks for no more heat where the reading lies over the middle of the range', () => {
+    const reading = judge(22.2, { low: 20, high: 22, lowerLimit: 19.5 }, { uncertainty: 1.83 })
+    expect(reading.standing).toBe('near')
+    expect(findFirstChange([reading], null)).toBeNull()
+  })
+
+  it('asks for no less heat where the reading lies under the middle of the range', () => {
+    const reading = judge(29, { low: 30, high: 32, upperLimit: 33 }, { uncertainty: 3 })
+    expect(reading.standing).toBe('near')
+    expect(findFirstChange([reading], null)).toBeNull()
+  })
+})
+
 describe('which reading comes first', () => {
   const row = { low: 30, high: 34, lowerLimit: 15, upperLimit: 45 }
 
@@ -121,6 +149,28 @@ describe('which reading comes first', () => {
     expect(findFirstChange([judge(7, uv)], null)?.ruleId).toBe('past-upper-limit')
     const damp = { parameter: 'relative-humidity', low: 30, high: 50, upperLimit: 80 } as const
     expect(findFirstChange([judge(90, damp)], null)?.ruleId).toBe('past-upper-limit')
+  })
+
+  it('is heat before a UV index before a humidity, where each is past an upper limit', () => {
+    const damp = judge(90, { parameter: 'relative-humidity', low: 30, high: 50, upperLimit: 80 })
+    const uv = judge(7, { parameter: 'uv-index', low: 1, high: 3, upperLimit: 6 }, { readingIndex: 1 })
+    const hot = judge(46, row, { readingIndex: 2 })
+    expect(findFirstChange([damp, uv, hot], 20)?.readingIndex).toBe(2)
+    expect(findFirstChange([damp, uv], 20)?.readingIndex).toBe(1)
+  })
+
+  it('is then danger to the body from heat, before any place that is too cool, range or no range', () => {
+    const cold = judge(10, row)
+    const hide = judge(44, {}, { readingIndex: 1, isHeatDanger: true })
+    expect(findFirstChange([cold, hide], 20)).toMatchObject({
+      ruleId: 'body-heat-danger',
+      readingIndex: 1,
+      isUrgent: true,
+      powerRatio: null,
+      targetC: null,
+    })
+    const past = judge(46, row, { readingIndex: 2 })
+    expect(findFirstChange([cold, hide, past], 20)?.readingIndex).toBe(2)
   })
 
   it('is then the worse verdict, and too hot before too cool', () => {
@@ -154,7 +204,7 @@ describe('the table of rules', () => {
   })
 
   it('names a number only where the rule has one', () => {
-    for (const trouble of ['past-upper-limit', 'too-hot', 'too-cool'] as const) {
+    for (const trouble of ['past-upper-limit', 'body-heat-danger', 'too-hot', 'too-cool'] as const) {
       for (const period of ['day', 'night'] as const) {
         for (const powerRatio of [null, 0.2, 0.85, 0.99, 1, 3]) {
           const rule = findChangeRule({ trouble, period, powerRatio, isRoomAtTarget: false })

@@ -262,3 +262,22 @@ describe('what a check may ask', () => {
     expect(checkInputSchema.parse(good)).toEqual(good)
   })
 })
+
+describe('danger to the body', () => {
+  const page = makeCheckPage({
+    physiology: [makeCitedPhysiology('maximum', { quantity: 'critical-thermal-maximum', meanC: 44 })],
+  })
+
+  it('is what to change first in a hide, although no range is cited', () => {
+    const hide = makeReading({ position: 'warm-hide', values: [43] })
+    expect(checkReadings(page, makeCheckInput([hide])).firstChange).toMatchObject({
+      ruleId: 'body-heat-danger',
+      readingIndex: 0,
+    })
+  })
+
+  it('changes nothing under a basking lamp, which the animal can leave by places that were not read', () => {
+    const basking = makeReading({ position: 'basking-surface', values: [43] })
+    expect(checkReadings(page, makeCheckInput([basking])).firstChange).toBeNull()
+  })
+})

@@ -198,6 +198,23 @@ describe('a UV index', () => {
     },
   )
 
+  it('keeps the limit of the row judged by, although a closer row of the other meaning has a laxer one', () => {
+    const rows = [
+      makeRange('typical adult', {
+        ...uv,
+        lifeStage: 'adult',
+        uvMeaning: 'typical',
+        low: 1,
+        high: 3,
+        upperLimit: 8,
+      }),
+      makeRange('maximum any', { ...uv, uvMeaning: 'maximum', low: 2, high: 4, upperLimit: 5 }),
+    ]
+    const selection = selectRanges(rows, ask({ ...uv, uvMeaning: 'maximum' }))
+    expect(ids(selection.judged)).toEqual(['maximum any'])
+    expect(selection.upper?.value).toBe(5)
+  })
+
   it('is not judged by the other meaning, whose limit still holds', () => {
     const selection = selectRanges(ranges.slice(1), ask({ ...uv, uvMeaning: 'typical' }))
     expect(selection.judged).toEqual([])
