@@ -10,6 +10,8 @@ const LIKENESS = { found: 0.45, shareOfBest: 0.8 }
 const FACET_VALUES_MAX = 300
 /** A word of fewer letters cannot be looked up in a trigram index. */
 const TRIGRAM_LETTERS = 3
+/** Shorter words are no sign of a scientific name. */
+const EPITHET_LETTERS = 4
 
 interface Statement {
   text: string
@@ -99,25 +101,41 @@ function writeHolderName(sql: SqlValues, words: string[]): string {
 function writeHits(sql: SqlValues, words: string[], meeting: 'rated' | 'alike'): string {
   const asked = sql.add(words.join(' '))
   const beginning = sql.add(`^${words.join('\\w*\\W+')}`)
+  const epithet = meeting === 'alike' ? writeEpithet(words) : null
+  const keepsEpithet =
+    epithet === null ? 'false' : `n.kind <> 'common' and n.normalised_name ~ ${sql.add(epithet)}`
   const rated = `n.species_id as id, n.kind, n.name, n.ordinal,
     case when n.normalised_name = ${asked} then 2
-      when ${words.length > 1} and n.normalised_name ~ ${beginning} then 1 else 0 end as place,
+      when ${words.length > 1} and n.normalised_name ~ ${beginning} then 1
+      when ${keepsEpithet} then 1 else 0 end as place,
     round(word_similarity(${asked}, n.normalised_name)::numeric, 4) as word_likeness,
     round(similarity(${asked}, n.normalised_name)::numeric, 4) as likeness`
   const names =
     meeting === 'rated'
       ? `species s join species_name n on n.species_id = s.id where ${writeHeld(sql, words).join(' and ')}`
-      : `find_similar_names(${asked}, ${sql.add(LIKENESS.found)}) n`
+      : `(select * from find_similar_names(${asked}, ${sql.add(LIKENESS.found)})
+          union select n.* from species_name n where ${keepsEpithet}) n`
   const near =
     meeting === 'rated'
       ? 'true'
-      : `word_likeness >= ${sql.add(LIKENESS.shareOfBest)} * (select max(word_likeness) from named)`
+      : `(place > 0 or word_likeness >= ${sql.add(LIKENESS.shareOfBest)} * (select max(word_likeness) from named))`
   return `named as materialized (select ${rated} from ${names}), hit as materialized (
     select distinct on (id) id, place + round(word_likeness, 1) as tier, likeness,
       case when kind <> 'scientific' then name end as matched_name
     from named where ${near}
     order by id, place desc, round(word_likeness, 1) desc, likeness desc, kind = 'scientific' desc, ordinal
   )`
+}
+
+/**
+ * What a scientific name ends with that moved to another genus: the epithet stays, at most with another ending for the new
+ * genus's gender (International Code of Zoological Nomenclature, articles 31.2 and 34.2; from memory). Null for other words.
+ */
+function writeEpithet(words: string[]): string | null {
+  const [genus = '', epithet = '', ...more] = words
+  if (more.length > 0 || genus.length < EPITHET_LETTERS || epithet.length < EPITHET_LETTERS) return null
+  const stem = /^(.{4,}?)(us|um|a|is|e)$/.exec(epithet)?.[1] ?? epithet
+  return `\\W${stem}(us|um|a|is|e)?$`
 }
 
 /** The filters that are no facets: real or invented, and overlaps of ranges, by the index on current ranges. */

@@ -123,6 +123,8 @@ describe('searchSpecies by name', () => {
     ['an old combination', 'Amphibolurus vitticeps', 'Pogona vitticeps', 'Amphibolurus vitticeps'],
     ['another', 'hyla cinerea', 'Dryophytes cinereus', 'Hyla cinerea'],
     ['an old genus alone', 'trachydosaurus', 'Tiliqua rugosa', 'Trachydosaurus rugosus'],
+    ['a combination nobody listed', 'Laemanctus vitticeps', 'Pogona vitticeps', null],
+    ['one with the ending of another gender', 'Osteopilus caeruleus', 'Ranoidea caerulea', null],
     ['a misspelt old combination', 'bufo marinis', 'Rhinella marina', 'Bufo marinus'],
     ['a common name', 'leopard gecko', 'Eublepharis macularius', 'Leopard gecko'],
     ['a misspelt common name', 'lepard geko', 'Eublepharis macularius', 'Leopard gecko'],
