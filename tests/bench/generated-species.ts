@@ -89,9 +89,9 @@ export function* generateSpecies(count: number): Generator<GeneratedSpecies> {
         family: `${capitalise(pick(SYLLABLES))}${pick(SYLLABLES)}idae`,
       }
     }
-    let scientificName = ''
-    do scientificName = `${genus} ${makeWord(2, pick(SPECIES_ENDINGS))}`
-    while (taken.has(scientificName))
+    const nameSpecies = () => `${genus} ${makeWord(2, pick(SPECIES_ENDINGS))}`
+    let scientificName = nameSpecies()
+    while (taken.has(scientificName)) scientificName = nameSpecies()
     taken.add(scientificName)
     const warm = 24 + Math.round(next() * 24) / 2
     const cool = warm - 4 - Math.round(next() * 12) / 2
