@@ -11,7 +11,12 @@ const CACHE_BYTES_MAX = 64_000_000
 /** A longer address is one of a kind, so its page is not kept. */
 const CACHED_ADDRESS_LENGTH_MAX = 500
 /** Parameters that pages know; an address with any other is not worth a place in the cache. */
-const KNOWN_PARAMETERS: ReadonlySet<string> = new Set<string>([...SEARCH_PARAMETERS, 'stage', 'season', 'lights'])
+const KNOWN_PARAMETERS: ReadonlySet<string> = new Set<string>([
+  ...SEARCH_PARAMETERS,
+  'stage',
+  'season',
+  'lights',
+])
 
 export interface Pages {
   renderer: PageRenderer
