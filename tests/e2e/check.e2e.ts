@@ -5,6 +5,7 @@ import { addPlace, fieldOf, readVerdicts, rowOf } from './helpers/check-form.js'
 import { JOURNEY_CHECK, JOURNEY_READINGS, toCheckAddress } from './helpers/check-links.js'
 import { BASKER } from './helpers/species.js'
 import { expect, test } from './helpers/test.js'
+import { revisit, visit } from './helpers/visit.js'
 
 const CHECK = `/species/${BASKER.slug}/check`
 
@@ -14,7 +15,7 @@ test.describe('Checking readings', () => {
     browser,
     watch,
   }) => {
-    await page.goto('/check')
+    await visit(page, '/check')
     await page.getByRole('main').getByRole('combobox', { name: 'Find a species' }).fill('salt-pan lizard')
     await page.getByRole('option', { name: new RegExp(BASKER.name) }).click()
     await expect(page).toHaveURL(CHECK)
@@ -44,12 +45,12 @@ test.describe('Checking readings', () => {
 
     await expect(page).toHaveURL(/\?c=1_4_aa_c22\*.*tl/)
     const address = page.url()
-    await page.reload()
+    await revisit(page)
     await expect(outcome).toContainText('5 readings')
     expect(await readVerdicts(page)).toEqual(typed)
 
     const other = await (await watch.open(browser)).newPage()
-    await other.goto(address)
+    await visit(other, address)
     await expect(other.getByRole('complementary', { name: 'The outcome' })).toContainText('5 readings')
     expect(await readVerdicts(other)).toEqual(typed)
 
@@ -65,7 +66,7 @@ test.describe('Checking readings', () => {
   })
 
   test('a verdict comes with its sentence, its row and who stands behind it', async ({ page }) => {
-    await page.goto(toCheckAddress({ ...JOURNEY_CHECK, readings: [JOURNEY_READINGS.hot] }))
+    await visit(page, toCheckAddress({ ...JOURNEY_CHECK, readings: [JOURNEY_READINGS.hot] }))
     const row = rowOf(page, 'Basking surface, lights on')
     await expect(row.locator('.sentence')).toContainText('Above 50 °C')
     await expect(row.getByRole('img')).toHaveCount(1)
@@ -74,7 +75,7 @@ test.describe('Checking readings', () => {
   })
 
   test('a link pins its revision and says what the current one would answer otherwise', async ({ page }) => {
-    await page.goto(toCheckAddress({ ...JOURNEY_CHECK, revision: 1 }))
+    await visit(page, toCheckAddress({ ...JOURNEY_CHECK, revision: 1 }))
     // Revision 1 gives the slab an upper limit of 54 °C; revision 4 raised it to 58 °C.
     const hot = rowOf(page, 'Basking surface, lights on')
     await expect(hot.locator('.answer')).toContainText('Near a limit')
@@ -93,7 +94,7 @@ test.describe('Checking readings', () => {
   test('what cannot be read is said at its field and at the top, and the rest is judged all the same', async ({
     page,
   }) => {
-    await page.goto(CHECK)
+    await visit(page, CHECK)
     await fieldOf(page, 'Basking surface, lights on').fill('47')
     const wrong = fieldOf(page, 'Warm hide, lights on')
     await wrong.fill('warm')
@@ -103,13 +104,13 @@ test.describe('Checking readings', () => {
     const summary = page.getByRole('group', { name: /field needs another look/ })
     await summary.getByRole('link', { name: /Warm hide/ }).click()
     await expect(wrong).toBeFocused()
-    await page.reload()
+    await revisit(page)
     await expect(fieldOf(page, 'Warm hide, lights on')).toHaveValue('warm')
     await expect(fieldOf(page, 'Basking surface, lights on')).toHaveValue('47')
   })
 
   test('a number that looks like the other scale is asked back and answered in place', async ({ page }) => {
-    await page.goto(CHECK)
+    await visit(page, CHECK)
     await fieldOf(page, 'Warm-end air, lights on').fill('91.5')
     const question = page.getByRole('group', { name: 'Question about Warm-end air, lights on' })
     await question.getByRole('button', { name: 'Yes, °F' }).click()
@@ -121,7 +122,7 @@ test.describe('Checking readings', () => {
 
   test('sharing copies the link and shows it', async ({ page, context }) => {
     await context.grantPermissions(['clipboard-read', 'clipboard-write'])
-    await page.goto(toCheckAddress(JOURNEY_CHECK))
+    await visit(page, toCheckAddress(JOURNEY_CHECK))
     await page.getByRole('button', { name: 'Share this check' }).click()
     await expect(page.getByText('The link is copied.')).toBeVisible()
     const shown = await page.getByRole('textbox', { name: 'Link to this check' }).inputValue()
@@ -134,10 +135,10 @@ test.describe('Checking readings', () => {
   test('a link that was cut short, or made by a newer version, says so and leaves an empty form', async ({
     page,
   }) => {
-    await page.goto(`${CHECK}?c=1_4_a`)
+    await visit(page, `${CHECK}?c=1_4_a`)
     await expect(page.getByRole('alert')).toContainText('This link cannot be read.')
     await expect(fieldOf(page, 'Basking surface, lights on')).toHaveValue('')
-    await page.goto(`${CHECK}?c=9_4_aa_*tbdcp46`)
+    await visit(page, `${CHECK}?c=9_4_aa_*tbdcp46`)
     await expect(page.getByRole('alert')).toContainText('made by a newer version')
   })
 
@@ -145,7 +146,7 @@ test.describe('Checking readings', () => {
     page,
     baseURL,
   }) => {
-    await page.goto(toCheckAddress(JOURNEY_CHECK))
+    await visit(page, toCheckAddress(JOURNEY_CHECK))
     await page.emulateMedia({ media: 'print' })
     const paper = page.locator('body')
     await expect(page.getByText(`${baseURL}/species/${BASKER.slug}/revisions/4`)).toBeVisible()

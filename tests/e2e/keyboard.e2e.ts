@@ -2,6 +2,7 @@ import type { Page } from '@playwright/test'
 import { fieldOf, rowOf } from './helpers/check-form.js'
 import { BASKER } from './helpers/species.js'
 import { expect, test } from './helpers/test.js'
+import { visit } from './helpers/visit.js'
 
 const MOST_PRESSES = 150
 
@@ -53,7 +54,7 @@ async function tabTo(page: Page, name: string | RegExp): Promise<void> {
 
 test.describe('By keyboard alone', () => {
   test('a species is found, read and checked', async ({ page }) => {
-    await page.goto('/')
+    await visit(page, '/')
     await expect(page.getByRole('combobox', { name: 'Find a species' })).toBeVisible()
     await page.keyboard.press('/')
     await page.keyboard.type('brack basker')
@@ -87,7 +88,7 @@ test.describe('By keyboard alone', () => {
   })
 
   test('the first stop skips to the page', async ({ page }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     await page.keyboard.press('Tab')
     expect(await readFocus(page)).toEqual({ name: 'Skip to the page', isMarked: true })
     await page.keyboard.press('Enter')
@@ -95,7 +96,7 @@ test.describe('By keyboard alone', () => {
   })
 
   test('the menu opens, closes by Escape and gives the focus back', async ({ page }) => {
-    await page.goto('/about')
+    await visit(page, '/about')
     await tabTo(page, 'Menu and display')
     await page.keyboard.press('Enter')
     await tabTo(page, /^(Theme|Light|Dark|As the device)/)
@@ -107,7 +108,7 @@ test.describe('By keyboard alone', () => {
   })
 
   test('filters are set and taken away', async ({ page }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     await tabTo(page, /Amphibia/)
     await page.keyboard.press('Space')
     await expect(page).toHaveURL('/species?class=Amphibia')

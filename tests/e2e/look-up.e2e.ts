@@ -1,13 +1,14 @@
 import type { Page } from '@playwright/test'
 import { BASKER } from './helpers/species.js'
 import { expect, test } from './helpers/test.js'
+import { revisit, visit } from './helpers/visit.js'
 
 /** The sentence above the results that says how many there are. */
 const countOf = (page: Page) => page.locator('#count')
 
 test.describe('Looking a species up', () => {
   test('a misspelt name leads from the first page to the species', async ({ page }) => {
-    await page.goto('/')
+    await visit(page, '/')
     const box = page.getByRole('combobox', { name: 'Find a species' })
     await box.fill('pogona viticeps')
     const option = page.getByRole('option', { name: /Pogona vitticeps/ })
@@ -20,7 +21,7 @@ test.describe('Looking a species up', () => {
   test('an old combination finds the species under the name it has now, and says what was found', async ({
     page,
   }) => {
-    await page.goto('/')
+    await visit(page, '/')
     await page.getByRole('combobox', { name: 'Find a species' }).fill('Bufo marinus')
     await page.getByRole('button', { name: 'Find' }).click()
     await expect(page).toHaveURL('/species?q=Bufo+marinus')
@@ -33,7 +34,7 @@ test.describe('Looking a species up', () => {
   })
 
   test('a common name finds its species as it is typed into the list', async ({ page }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     await page.getByLabel('Find a species').fill('brack basker')
     const rows = page.getByRole('region', { name: 'Results' }).getByRole('listitem')
     await expect(rows.first()).toContainText(BASKER.name)
@@ -45,7 +46,7 @@ test.describe('Looking a species up', () => {
 
 test.describe('The list of species', () => {
   test('begins with the pages that have cited ranges and marks the invented ones', async ({ page }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     const rows = page
       .getByRole('region', { name: 'Results' })
       .getByRole('listitem')
@@ -56,7 +57,7 @@ test.describe('The list of species', () => {
   })
 
   test('keeps a choice of facets in the address, through reload and back', async ({ page }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     const filters = page.getByRole('region', { name: 'Filters' })
     const count = countOf(page)
     await expect(count).toHaveText(/^\d+ species$/)
@@ -66,7 +67,7 @@ test.describe('The list of species', () => {
     await expect(page).toHaveURL('/species?class=Amphibia')
     await expect(count).not.toHaveText(all ?? '')
     const amphibians = await count.textContent()
-    await page.reload()
+    await revisit(page)
     await expect(box).toBeChecked()
     await expect(count).toHaveText(amphibians ?? '')
     await page.goBack()
@@ -76,7 +77,7 @@ test.describe('The list of species', () => {
   })
 
   test('counts in each facet what choosing it would show', async ({ page }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     const row = page
       .getByRole('region', { name: 'Filters' })
       .getByRole('group', { name: 'Class' })
@@ -91,7 +92,7 @@ test.describe('The list of species', () => {
   test('finds pages by a range that meets the one asked for, typed in the reader’s own unit', async ({
     page,
   }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     await page.getByRole('radio', { name: '°F' }).check({ force: true })
     const filters = page.getByRole('region', { name: 'Filters' })
     // 111 to 115 °F is 43.9 to 46.1 °C; the basker's slab is to read 44 to 50 °C.
@@ -104,14 +105,14 @@ test.describe('The list of species', () => {
     await expect(rows.filter({ hasText: 'Pogona vitticeps' })).toHaveCount(0)
     const chip = page.getByRole('list', { name: 'Filters that are on' }).getByRole('link').first()
     await expect(chip).toContainText('111')
-    await page.reload()
+    await revisit(page)
     await expect(chip).toContainText('°F')
     await chip.click()
     await expect(page).toHaveURL('/species')
   })
 
   test('goes on behind the first rows, and an address leads to the later ones', async ({ page }) => {
-    await page.goto('/species')
+    await visit(page, '/species')
     const rows = page.getByRole('region', { name: 'Results' }).locator('ol').getByRole('link')
     await expect(rows).toHaveCount(20)
     const more = page.getByRole('link', { name: 'Show more' })
@@ -122,25 +123,25 @@ test.describe('The list of species', () => {
     expect(new Set(names).size).toBe(names.length)
     const total = await countOf(page).textContent()
     expect(total).toBe(`${names.length} species`)
-    await page.goto(address)
+    await visit(page, address)
     await expect(page.getByText('These are later rows.')).toBeVisible()
     await expect(rows.first()).toHaveText(names[20] ?? '')
   })
 
   test('offers to ask for a page that nobody has begun, and counts the wish', async ({ page }) => {
     const name = 'Zzyzxia nemorosa'
-    await page.goto(`/species?q=${encodeURIComponent(name)}`)
+    await visit(page, `/species?q=${encodeURIComponent(name)}`)
     await expect(page.getByText(`No page for “${name}”.`)).toBeVisible()
     await page.getByRole('button', { name: `Ask for a page on “${name}”` }).click()
     await expect(page.getByText(/^Counted: /)).toContainText('yours is the first wish')
-    await page.reload()
+    await revisit(page)
     await page.getByRole('button', { name: `Ask for a page on “${name}”` }).click()
     await expect(page.getByText(/^Counted: /)).toContainText('2 wishes so far')
   })
 
   test('says what is wrong with an address it cannot read', async ({ page, watch }) => {
     watch.expect(/status of 400/)
-    const response = await page.goto('/species?overlap=warm&sort=sideways')
+    const response = await visit(page, '/species?overlap=warm&sort=sideways')
     expect(response?.status()).toBe(400)
     await expect(page.getByRole('alert')).toContainText('This address cannot be read as a search.')
     await page.getByRole('link', { name: 'Show all species' }).click()

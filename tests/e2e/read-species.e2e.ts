@@ -1,6 +1,7 @@
 import type { Page } from '@playwright/test'
 import { BASKER, FENCE_LIZARD } from './helpers/species.js'
 import { expect, test } from './helpers/test.js'
+import { revisit, visit } from './helpers/visit.js'
 
 /** The row of a place on the species page. */
 const rowOf = (page: Page, place: string) =>
@@ -9,7 +10,7 @@ const rowOf = (page: Page, place: string) =>
 test.describe('Reading the page of an invented species', () => {
   test('says on every screen of it that it is invented', async ({ page }) => {
     for (const path of ['', '/revisions', '/revisions/1', '/check']) {
-      await page.goto(`/species/${BASKER.slug}${path}`)
+      await visit(page, `/species/${BASKER.slug}${path}`)
       await expect(page.getByRole('note', { name: 'Invented' })).toBeVisible()
     }
     await expect(page.locator('meta[name=robots]')).toHaveAttribute('content', /noindex/)
@@ -18,7 +19,7 @@ test.describe('Reading the page of an invented species', () => {
   test('a row opens to who says so, with numbers as printed and the unit they were printed in', async ({
     page,
   }) => {
-    await page.goto(`/species/${BASKER.slug}`)
+    await visit(page, `/species/${BASKER.slug}`)
     const row = rowOf(page, 'Basking surface')
     await expect(row).toContainText(/44\s–\s50/)
     await row.locator('summary').first().click()
@@ -35,7 +36,7 @@ test.describe('Reading the page of an invented species', () => {
   test('the switches are the address: another stage and the lights off give other targets, kept by reload', async ({
     page,
   }) => {
-    await page.goto(`/species/${BASKER.slug}`)
+    await visit(page, `/species/${BASKER.slug}`)
     const slab = rowOf(page, 'Basking surface')
     await expect(slab).toContainText(/44\s–\s50/)
     await page.getByRole('navigation', { name: 'Life stage' }).getByRole('link', { name: 'Juvenile' }).click()
@@ -44,7 +45,7 @@ test.describe('Reading the page of an invented species', () => {
     await page.getByRole('navigation', { name: 'Lights' }).getByRole('link', { name: 'Off' }).click()
     await expect(page).toHaveURL(`/species/${BASKER.slug}?stage=juvenile&lights=off`)
     await expect(rowOf(page, 'Warm-end air')).toContainText(/19\s–\s24/)
-    await page.reload()
+    await revisit(page)
     await expect(rowOf(page, 'Warm-end air')).toContainText(/19\s–\s24/)
     await expect(
       page.getByRole('navigation', { name: 'Lights' }).getByRole('link', { name: 'Off' }),
@@ -52,13 +53,13 @@ test.describe('Reading the page of an invented species', () => {
   })
 
   test('the unit chosen holds on every page and in the server’s own markup', async ({ page }) => {
-    await page.goto(`/species/${BASKER.slug}`)
+    await visit(page, `/species/${BASKER.slug}`)
     const slab = rowOf(page, 'Basking surface')
     await expect(slab).toContainText('°C')
     await page.getByRole('radio', { name: '°F' }).check({ force: true })
     // 44 to 50 °C.
     await expect(slab).toContainText(/111\s–\s122/)
-    await page.reload()
+    await revisit(page)
     await expect(slab).toContainText(/111\s–\s122/)
     const markup = await (await page.request.get(`/species/${BASKER.slug}`)).text()
     expect(markup).toMatch(/111\s–\s122/)
@@ -66,7 +67,7 @@ test.describe('Reading the page of an invented species', () => {
   })
 
   test('the theme chosen is kept and comes with the first byte', async ({ page }) => {
-    await page.goto(`/species/${BASKER.slug}`)
+    await visit(page, `/species/${BASKER.slug}`)
     const background = () => page.evaluate(() => getComputedStyle(document.body).backgroundColor)
     await page.locator('summary').filter({ hasText: 'Menu and display' }).click()
     await page.getByRole('radio', { name: 'Light' }).check({ force: true })
@@ -74,14 +75,14 @@ test.describe('Reading the page of an invented species', () => {
     await page.getByRole('radio', { name: 'Dark' }).check({ force: true })
     await expect.poll(background).not.toBe(light)
     const dark = await background()
-    await page.reload()
+    await revisit(page)
     expect(await background()).toBe(dark)
     const markup = await (await page.request.get(`/species/${BASKER.slug}`)).text()
     expect(markup).toMatch(/<html[^>]*data-theme="dark"/)
   })
 
   test('an earlier revision stands as it was published and leads to the current one', async ({ page }) => {
-    await page.goto(`/species/${BASKER.slug}`)
+    await visit(page, `/species/${BASKER.slug}`)
     const history = page.getByRole('region', { name: 'How this page came to be' })
     await history.getByRole('link', { name: 'Revision 1', exact: true }).click()
     await expect(page).toHaveURL(`/species/${BASKER.slug}/revisions/1`)
@@ -98,14 +99,14 @@ test.describe('Reading the page of an invented species', () => {
 
 test.describe('Reading the page of a real species', () => {
   test('without a cited range it gives no target and asks for a source', async ({ page }) => {
-    await page.goto(`/species/${FENCE_LIZARD.slug}`)
+    await visit(page, `/species/${FENCE_LIZARD.slug}`)
     await expect(page.getByRole('note', { name: 'Invented' })).toHaveCount(0)
     await expect(page.getByRole('heading', { name: 'No cited range yet' })).toBeVisible()
     await expect(page.getByText('The animal’s body, never an enclosure setting.')).toBeVisible()
   })
 
   test('the records behind a line open with the words and numbers of their dataset', async ({ page }) => {
-    await page.goto(`/species/${FENCE_LIZARD.slug}`)
+    await visit(page, `/species/${FENCE_LIZARD.slug}`)
     const body = page.getByRole('region', { name: 'What is known of its body' })
     await expect(body).toContainText('Records from')
     const entry = body.locator('details').first()
@@ -119,7 +120,7 @@ test.describe('Reading the page of a real species', () => {
   test('every source of the page has its own page, which names the species it is cited on', async ({
     page,
   }) => {
-    await page.goto(`/species/${FENCE_LIZARD.slug}`)
+    await visit(page, `/species/${FENCE_LIZARD.slug}`)
     await page
       .getByRole('region', { name: 'Sources' })
       .getByRole('link', { name: /all that cites it/ })
@@ -131,7 +132,7 @@ test.describe('Reading the page of a real species', () => {
 
   test('an address that names no species says so with its status', async ({ page, watch }) => {
     watch.expect(/status of 404/)
-    const response = await page.goto('/species/no-such-animal')
+    const response = await visit(page, '/species/no-such-animal')
     expect(response?.status()).toBe(404)
     await expect(page.getByRole('heading', { level: 1 })).toHaveText('No such page')
   })
