@@ -26,6 +26,8 @@ export interface SearchPlan {
    * have names like them, `none` where there are no words.
    */
   meeting: 'none' | 'rated' | 'listed' | 'alike'
+  /** An overlap filter that few pages meet: they are gathered first. Null where the listing is walked until enough fit. */
+  gatheredBy: OverlapFilter | null
   /** Where the answer goes on, or null for its beginning. */
   after: SearchPlace | null
   /** Whether to count the total and the facets too. */
@@ -40,16 +42,35 @@ export function writeHolders(words: string[], most: number): Statement {
   return { text, values: sql.values }
 }
 
+/** A statement that counts, for each overlap filter, the ranges that meet it, up to `most`. */
+export function writeOverlapping(overlaps: OverlapFilter[], most: number): Statement {
+  const sql = new SqlValues()
+  const limit = sql.add(most)
+  const counts = overlaps.map(
+    (overlap) => `(select count(*)::int from (${selectOverlapping(sql, overlap)} limit ${limit}) r)`,
+  )
+  return { text: `select array[${counts.join(', ')}]::int[] as ranges`, values: sql.values }
+}
+
 /** One statement for a page of answers and, where asked, the total and the facets. */
 export function writeSearch(plan: SearchPlan): Statement {
-  const { query, words, meeting, withCounts } = plan
+  const { query, words, meeting, gatheredBy, withCounts } = plan
   const sql = new SqlValues()
   const isScored = meeting === 'rated' || meeting === 'alike'
   const hits = isScored ? [writeHits(sql, words, meeting)] : []
-  const fixed = writeFixedFilters(sql, query)
+  const gathering = isScored ? null : gatheredBy
+  if (gathering !== null) {
+    const ranges = selectOverlapping(sql, gathering)
+    hits.push(`hit as materialized (select distinct species_id as id from (${ranges}) r)`)
+  }
+  const fixed = writeFixedFilters(
+    sql,
+    query.overlaps.filter((overlap) => overlap !== gathering),
+    query.invented,
+  )
   if (meeting === 'listed') fixed.push(...writeHeld(sql, words))
   const facetFilters = writeFacetFilters(sql, query)
-  const from = isScored ? 'species s join hit on hit.id = s.id' : 'species s'
+  const from = hits.length > 0 ? 'species s join hit on hit.id = s.id' : 'species s'
   const parts = [...hits, writePage(sql, plan, from, [...fixed, ...Object.values(facetFilters)])]
   if (withCounts) parts.push(writeBase(from, fixed, facetFilters))
   return {
@@ -139,9 +160,9 @@ function writeEpithet(words: string[]): string | null {
 }
 
 /** The filters that are no facets: real or invented, and overlaps of ranges, by the index on current ranges. */
-function writeFixedFilters(sql: SqlValues, query: SearchQuery): string[] {
-  const filters = query.overlaps.map((overlap) => writeOverlapFilter(sql, overlap))
-  if (query.invented !== null) filters.push(`s.is_invented = ${sql.add(query.invented)}`)
+function writeFixedFilters(sql: SqlValues, overlaps: OverlapFilter[], invented: boolean | null): string[] {
+  const filters = overlaps.map((overlap) => writeOverlapFilter(sql, overlap))
+  if (invented !== null) filters.push(`s.is_invented = ${sql.add(invented)}`)
   return filters
 }
 
@@ -149,13 +170,17 @@ function writeFixedFilters(sql: SqlValues, query: SearchQuery): string[] {
  * A page overlaps where a range that answers for this position and period has a value in common with [low, high], ends
  * included. The projection holds a row for every question a range answers, so one look into its index is enough.
  */
-export function writeOverlapFilter(
+function writeOverlapFilter(sql: SqlValues, overlap: OverlapFilter): string {
+  return `s.id in (${selectOverlapping(sql, overlap)})`
+}
+
+function selectOverlapping(
   sql: SqlValues,
   { parameter, position, period, low, high }: OverlapFilter,
 ): string {
-  return `s.id in (select r.species_id from current_range r
+  return `select r.species_id from current_range r
     where r.parameter = ${sql.add(parameter)} and r.position = ${sql.add(position)} and r.period = ${sql.add(period)}
-      and r.span && numrange(${sql.add(low)}::numeric, ${sql.add(high)}::numeric, '[]'))`
+      and r.span && numrange(${sql.add(low)}::numeric, ${sql.add(high)}::numeric, '[]')`
 }
 
 const FACETS = {

@@ -1,9 +1,9 @@
 import type { EntityManager } from 'typeorm'
-import type { SearchAnswer, SearchQuery } from '../../shared/search.js'
+import type { OverlapFilter, SearchAnswer, SearchQuery } from '../../shared/search.js'
 import type { SpeciesListItem } from '../../shared/species.js'
 import { readSearchCursor, writeSearchCursor } from './search-cursor.js'
 import type { SearchPlace } from './search-cursor.js'
-import { writeHolders, writeSearch } from './search-statement.js'
+import { writeHolders, writeOverlapping, writeSearch } from './search-statement.js'
 import { toSearchWords } from './search-words.js'
 
 /** How alike a name must be to the words to be offered when nothing was found (see `LIKENESS`); our policy. */
@@ -11,6 +11,11 @@ const OFFERED_LIKENESS = 0.25
 const NEAREST_MAX = 5
 /** Past so many hits the order is that of the listing: nobody reads on to see the likest one first. */
 const RATED_MAX = 1000
+/**
+ * Up to so many ranges that meet a filter, their pages are gathered by the index on current ranges and put in order; past so
+ * many, a walk of the listing soon meets enough of them. Either way the work does not grow with the number of pages.
+ */
+export const GATHERED_MAX = 1000
 
 export type SearchCounts = Pick<SearchAnswer, 'facets' | 'total'>
 
@@ -39,7 +44,8 @@ export async function searchSpecies(
   const key = JSON.stringify({ ...query, q: words, sort: null, cursor: null, limit: null })
   const known = countStore?.find(key) ?? null
   const meeting = words.length === 0 ? 'none' : await chooseMeeting(db, words)
-  const statement = writeSearch({ query, words, meeting, after, withCounts: known === null })
+  const gatheredBy = await chooseGathering(db, query.overlaps)
+  const statement = writeSearch({ query, words, meeting, gatheredBy, after, withCounts: known === null })
   const [answer] = await db.query<{ found: FoundRow[]; counts: SearchCounts | null }[]>(
     statement.text,
     statement.values,
@@ -68,6 +74,16 @@ async function chooseMeeting(db: EntityManager, words: string[]): Promise<'alike
   const holders = row?.holders ?? 0
   if (holders === 0) return 'alike'
   return holders <= RATED_MAX ? 'rated' : 'listed'
+}
+
+/** The overlap filter that the fewest ranges meet, if they are few. The database cannot tell: it reckons with an average filter. */
+async function chooseGathering(db: EntityManager, overlaps: OverlapFilter[]): Promise<OverlapFilter | null> {
+  if (overlaps.length === 0) return null
+  const { text, values } = writeOverlapping(overlaps, GATHERED_MAX + 1)
+  const [row] = await db.query<{ ranges: number[] }[]>(text, values)
+  const counts = row?.ranges ?? []
+  const fewest = Math.min(...counts)
+  return fewest <= GATHERED_MAX ? (overlaps[counts.indexOf(fewest)] ?? null) : null
 }
 
 /** Names near to some words, the nearest first, one for each page. */

@@ -2,7 +2,7 @@ import type { DataSource } from 'typeorm'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { createDataSource } from '../../../server/data-source.js'
 import { writeSearch } from '../../../server/queries/search-statement.js'
-import { searchSpecies } from '../../../server/queries/search.js'
+import { GATHERED_MAX, searchSpecies } from '../../../server/queries/search.js'
 import { selectRanges } from '../../../shared/checker/selection.js'
 import type { Parameter, Period, Position } from '../../../shared/ranges.js'
 import { EMPTY_SEARCH } from '../../../shared/search-query.js'
@@ -164,22 +164,55 @@ describe('the statement of a search', () => {
         (values ('basking-surface'), ('cool-hide')) p (position), (values ('day'), ('night')) q (period);
       analyze species; analyze current_range;
     `)
-    const filters: OverlapFilter[] = [
-      { parameter: 'temperature', position: 'cool-hide', period: 'night', low: 43, high: null },
-    ]
-    const explain = async (overlaps: OverlapFilter[], withCounts: boolean) => {
-      const query = { ...EMPTY_SEARCH, overlaps }
-      const { text, values } = writeSearch({ query, words: [], meeting: 'none', after: null, withCounts })
+    const few: OverlapFilter = {
+      parameter: 'temperature',
+      position: 'cool-hide',
+      period: 'night',
+      low: 43,
+      high: null,
+    }
+    const many: OverlapFilter = { ...few, low: 0 }
+    const explain = async (overlap: OverlapFilter, gathers: boolean, withCounts: boolean) => {
+      const query = { ...EMPTY_SEARCH, overlaps: [overlap] }
+      const gatheredBy = gathers ? overlap : null
+      const { text, values } = writeSearch({
+        query,
+        words: [],
+        meeting: 'none',
+        gatheredBy,
+        after: null,
+        withCounts,
+      })
       const plan = await owner.query<{ 'QUERY PLAN': string }[]>(`explain ${text}`, values)
       return plan.map((row) => row['QUERY PLAN']).join('\n')
     }
-    const selective = await explain(filters, true)
-    expect(selective).toContain('current_range_span_idx')
-    expect(selective).not.toMatch(/Seq Scan on current_range/)
+    // Where few pages overlap, the index finds them and nothing else is read.
+    for (const withCounts of [true, false]) {
+      const gathered = await explain(few, true, withCounts)
+      expect(gathered).toContain('current_range_span_idx')
+      expect(gathered).not.toMatch(/Seq Scan on current_range/)
+      expect(gathered).not.toContain('species_listing_idx')
+    }
     // Where nearly every page overlaps, the first twenty of the listing are looked at one by one.
-    const broad = await explain([{ ...filters[0]!, low: 0 }], false)
-    expect(broad).toMatch(/current_range_(span|species)_idx/)
-    expect(broad).not.toMatch(/Seq Scan on current_range/)
+    const walked = await explain(many, false, false)
+    expect(walked).toMatch(/current_range_(span|species)_idx/)
+    expect(walked).not.toMatch(/Seq Scan on current_range/)
+
+    const find = async (overlap: OverlapFilter, gathers: boolean) => {
+      const query = { ...EMPTY_SEARCH, overlaps: [overlap] }
+      const gatheredBy = gathers ? overlap : null
+      const plan = { query, words: [], meeting: 'none' as const, gatheredBy, after: null, withCounts: true }
+      const { text, values } = writeSearch(plan)
+      const [answer] = await owner.query<{ found: unknown[]; counts: { total: number } }[]>(text, values)
+      return answer!
+    }
+    const gathered = await find(few, true)
+    expect(gathered.found).toHaveLength(EMPTY_SEARCH.limit + 1)
+    expect(gathered).toEqual(await find(few, false))
+    expect(gathered.counts.total).toBeLessThan(GATHERED_MAX)
+    const all = await searchSpecies(owner.manager, { ...EMPTY_SEARCH, overlaps: [many] })
+    expect(all.total).toBeGreaterThan(GATHERED_MAX)
+    expect(all.items).toHaveLength(EMPTY_SEARCH.limit)
     await owner.destroy()
   })
 })
