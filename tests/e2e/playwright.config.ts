@@ -13,7 +13,7 @@ export default defineConfig({
   retries: 0,
   // Long enough for a machine that does other work beside; nothing here waits for time to pass.
   timeout: 120_000,
-  expect: { timeout: 20_000 },
+  expect: { timeout: 40_000 },
   reporter: [['list'], ['json', { outputFile: process.env.E2E_REPORT ?? '../../test-results/e2e.json' }]],
   use: {
     baseURL,
