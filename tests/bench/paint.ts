@@ -1,7 +1,7 @@
 import lighthouse from 'lighthouse'
 import { median } from './statistics.js'
 
-const ROUNDS = 5
+const ROUNDS = 3
 
 /** Largest contentful paint in ms on the throttled phone that Lighthouse stands for (slow 4G, a quarter of the processor). */
 async function measurePaint(url: string, port: number): Promise<number> {
