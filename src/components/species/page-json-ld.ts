@@ -2,7 +2,6 @@ import { toFullReference } from '../../../shared/citation.js'
 import { PARAMETER_LABELS } from '../../../shared/labels.js'
 import type { SpeciesPage } from '../../../shared/species.js'
 
-const LICENCE = 'https://creativecommons.org/licenses/by/4.0/'
 const CITATIONS_MAX = 40
 
 function toTaxon(page: SpeciesPage) {
@@ -28,7 +27,8 @@ export function toJsonLd(page: SpeciesPage, address: string): Record<string, unk
     url: address,
     version: String(revision.number),
     datePublished: revision.publishedAt,
-    license: LICENCE,
+    // Contributions and each dataset have licences of their own; the terms say which holds for what.
+    license: new URL('/terms', address).href,
     isAccessibleForFree: true,
     creator: { '@type': 'Organization', name: 'Mossgauge' },
     about: toTaxon(page),
