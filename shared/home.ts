@@ -12,11 +12,12 @@ const pageRefSchema = z.strictObject({
 export const homeAnswerSchema = z.strictObject({
   realSpecies: z.int(),
   inventedSpecies: z.int(),
+  /** Of the real species, those with a cited range. */
   withRanges: z.int(),
   records: z.int(),
   sources: z.int(),
   recent: z.array(z.strictObject({ ...pageRefSchema.shape, revision: revisionMarkSchema })),
-  /** Pages asked for or looked at that have no cited range yet. */
+  /** Real species without a cited range, those with most records first. */
   wanting: z.array(z.strictObject({ ...pageRefSchema.shape, physiologyCount: z.int() })),
 })
 export type HomeAnswer = z.infer<typeof homeAnswerSchema>

@@ -34,7 +34,7 @@ const FIND_HOME = {
       select
         count(*) filter (where not is_invented) as real_species,
         count(*) filter (where is_invented) as invented_species,
-        count(*) filter (where range_count > 0) as with_ranges,
+        count(*) filter (where range_count > 0 and not is_invented) as with_ranges,
         coalesce(sum(physiology_count) filter (where not is_invented), 0) as records
       from species
     ) counted`,
