@@ -10,7 +10,17 @@ import { escapeHtml } from '../render/escape.js'
 /** The sitemap protocol allows 50,000 (https://www.sitemaps.org/protocol.html); smaller files load sooner. */
 export const SITEMAP_PART_SIZE = 10_000
 const NAMESPACE = 'http://www.sitemaps.org/schemas/sitemap/0.9'
-const FIXED_PATHS = ['/', '/species', '/sources', '/about', '/method', '/attributions', '/terms', '/privacy']
+const FIXED_PATHS = [
+  '/',
+  '/species',
+  '/check',
+  '/sources',
+  '/about',
+  '/method',
+  '/attributions',
+  '/terms',
+  '/privacy',
+]
 
 /** `/sitemap.xml`, which names the parts, the parts themselves, and `/robots.txt`, which names the sitemap. */
 export function sitemap(dataSource: DataSource, origin: string): Router {
