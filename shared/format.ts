@@ -20,13 +20,6 @@ export function toReaderUnit(canonical: Unit, units: ReaderUnits): Unit {
   return canonical
 }
 
-/** The canonical unit of a quantity that was typed or printed in `unit`. */
-export function toCanonicalUnit(unit: Unit): Unit {
-  if (unit === 'degF') return 'degC'
-  if (unit === 'in') return 'cm'
-  return unit
-}
-
 /** How many decimals a number needs to be written whole, at most `most`. */
 export function countDecimals(value: number, most: number): number {
   for (let decimals = 0; decimals < most; decimals += 1) {

@@ -1,6 +1,5 @@
 import type { Standing } from './checker/verdict.js'
 import type { EvidenceKind } from './evidence.js'
-import type { NameStatus } from './names.js'
 import type { Quantity } from './physiology.js'
 import type { Parameter, Period, Position, RecordLifeStage, Season, UvMeaning } from './ranges.js'
 import type { SourceKind } from './sources.js'
@@ -113,12 +112,6 @@ export const SOURCE_KIND_LABELS: Record<SourceKind, string> = {
   law: 'Law or code',
   'web-page': 'Web page',
   other: 'Other',
-}
-
-export const NAME_STATUS_LABELS: Record<NameStatus, string> = {
-  accepted: 'Accepted name',
-  unresolved: 'Unresolved name',
-  'needs-a-person': 'Name that a person has to settle',
 }
 
 /** How a unit is written behind a number. A UV index has no unit; the letters say which scale it is. */
