@@ -271,8 +271,10 @@ await runCommand(async (run) => {
   for (const { title, measure } of parts) {
     const partStartedAt = Date.now()
     say(`${title} …`)
-    figures.push(...(await measure(run, cluster)))
-    say(`  Measured in ${secondsSince(partStartedAt)}.`)
+    const measured = await measure(run, cluster)
+    figures.push(...measured)
+    // Said at once too: a later part that breaks off takes nothing away.
+    say(`${writeTable(measured)}\n  Measured in ${secondsSince(partStartedAt)}.`)
   }
   const table = writeTable(figures)
   mkdirSync(resultsFolder, { recursive: true })

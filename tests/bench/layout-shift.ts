@@ -13,6 +13,9 @@ const NETWORK = {
   uploadThroughput: (750 * 1024) / 8,
 }
 
+/** A slow line on a busy machine. */
+const LOAD_PATIENCE_MS = 120_000
+
 declare global {
   interface Window {
     shifts: number
@@ -55,7 +58,7 @@ export async function measureShifts(
           }
         }).observe({ type: 'layout-shift', buffered: true })
       })
-      await page.goto(origin + path, { waitUntil: 'networkidle' })
+      await page.goto(origin + path, { waitUntil: 'networkidle', timeout: LOAD_PATIENCE_MS })
       // Fonts are in and two more frames are drawn.
       const score = await page.evaluate(async () => {
         await document.fonts.ready
